@@ -1,0 +1,45 @@
+/** Kinds of quantity a cell, column or named value can hold. Units per system: see `unitOf`. */
+export const quantities = [
+  'length',
+  'small-length',
+  'area',
+  'volume',
+  'angle',
+  'temperature',
+  'temperature-difference',
+  'thermal-resistance',
+  'u-value',
+  'conductance',
+  'linear-conductance',
+  'volumetric-heat-capacity',
+  'heat-capacity',
+  'heat-rate',
+  'energy',
+  'irradiation',
+  'pressure',
+  'speed',
+  'mass-per-area',
+  'mass',
+  'degree-days',
+  'money',
+  'money-per-area',
+  'money-per-length',
+  'money-per-mass',
+  'money-per-hour',
+  'ratio',
+  'count',
+  'air-changes',
+  'expansion',
+  'daily-light',
+  'years',
+  'hours',
+  'number',
+  'text',
+  'boolean',
+  'date',
+] as const
+
+export type Quantity = (typeof quantities)[number]
+
+export const unitSystems = ['us', 'si'] as const
+export type UnitSystem = (typeof unitSystems)[number]

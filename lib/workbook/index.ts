@@ -1,0 +1,6 @@
+export * from './contracts'
+export * from './limits'
+export * from './model'
+export * from './operations'
+export * from './serial'
+export * from './wire'
