@@ -1,0 +1,24 @@
+import type { Metadata } from 'next'
+import Link from 'next/link'
+import { buttonClass } from './_ui/button'
+import { Notice } from './_ui/notice'
+
+export const metadata: Metadata = { title: 'Not found' }
+
+export default function NotFound() {
+  return (
+    <Notice
+      title="There is nothing at this address"
+      actions={
+        <Link href="/workbooks" className={buttonClass('action')}>
+          Go to the workbooks
+        </Link>
+      }
+    >
+      <p>
+        The workbook may have been removed, or it belongs to another firm. Addresses are shown in full only to
+        people who may open them.
+      </p>
+    </Notice>
+  )
+}
