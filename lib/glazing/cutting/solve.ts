@@ -1,0 +1,94 @@
+import { fail, type Result, succeed } from '../../failures'
+import { relax } from './column-generation'
+import { type Bars, constructive, costOf, downsize } from './constructive'
+import { cheaper, coveringProgram, maximalPatterns, type SolveIntegerProgram, toBars } from './exact'
+import { type Bar, type CuttingPlan, type CuttingProblem, type Instance, toInstance, used } from './problem'
+import { roundRelaxation } from './rounding'
+
+/**
+ * Least cost, then least waste, then fewest bars. Column generation bounds the cost and nearly always gives the
+ * plan; the integer program (when given) closes what gap is left over all maximal patterns; a constructive plan is
+ * always kept to fall back on. Effort is counted, never timed: the same input gives the same plan.
+ * Errors: `invalid` when a piece fits no stock or a number is not what it should be; `limit` when the stock does not suffice.
+ */
+export function solveCutting(
+  problem: CuttingProblem,
+  integerProgram?: SolveIntegerProgram,
+): Result<CuttingPlan> {
+  const made = toInstance(problem)
+  if (!made.ok) return made
+  const instance = made.value
+  if (instance.demands.length === 0) return succeed({ bars: [], cost: 0, waste: 0, bound: 0, proven: true })
+
+  const available = instance.stock.map((option) => option.available)
+  const many = instance.demands.reduce((sum, count) => sum + count, 0)
+  let best = constructive(instance, instance.demands, available, many > 2_000 ? 0 : 8)
+  const relaxation = relax(instance)
+  best = cheaper(instance, best, roundRelaxation(instance, relaxation, many > 2_000 ? 4 : 24))
+  let bound = stepUp(instance, relaxation.bound)
+
+  if (integerProgram && (!best || costOf(instance, best) > bound + slack(bound))) {
+    const all = maximalPatterns(instance, 4_000)
+    const patterns = all ?? relaxation.pool
+    const solved = integerProgram(coveringProgram(instance, patterns))
+    if (solved) {
+      best = cheaper(instance, best, toBars(instance, patterns, solved.values))
+      if (all) bound = Math.max(bound, stepUp(instance, solved.bound))
+    }
+  }
+  if (!best || best.length === 0)
+    return fail('limit', 'The stock that is available does not suffice for all pieces.')
+  return succeed(toPlan(problem, instance, downsize(instance, best, available), bound))
+}
+
+function slack(bound: number): number {
+  return 1e-7 * Math.max(1, Math.abs(bound))
+}
+
+/** Costs come in steps of the prices' common measure, so a bound rises to the next step. */
+function stepUp(instance: Instance, bound: number): number {
+  const cents = instance.stock.map((option) => Math.round(option.price * 1e4))
+  if (instance.stock.some((option, s) => Math.abs(option.price * 1e4 - (cents[s] ?? 0)) > 1e-6)) return bound
+  const step = cents.reduce(greatestCommonDivisor, 0) / 1e4
+  return step > 0 ? Math.ceil(bound / step - 1e-6) * step : bound
+}
+
+function greatestCommonDivisor(a: number, b: number): number {
+  return b === 0 ? a : greatestCommonDivisor(b, a % b)
+}
+
+function toPlan(problem: CuttingProblem, instance: Instance, bars: Bars, bound: number): CuttingPlan {
+  const marks = new Map<number, (string | undefined)[]>()
+  for (const piece of problem.pieces) {
+    const list = marks.get(piece.length) ?? []
+    for (let k = 0; k < piece.count; k += 1) list.push(piece.mark)
+    marks.set(piece.length, list)
+  }
+  const marked = problem.pieces.some((piece) => piece.mark !== undefined)
+  const order = bars
+    .map((bar) => ({ bar, option: instance.stock[bar.stock] }))
+    .sort(
+      (a, b) =>
+        (b.option?.length ?? 0) - (a.option?.length ?? 0) || compareCounts(a.bar.counts, b.bar.counts),
+    )
+  const cut: Bar[] = order.map(({ bar, option }) => {
+    const pieces = bar.counts.flatMap((count, i) => new Array<number>(count).fill(instance.lengths[i] ?? 0))
+    const length = option?.length ?? 0
+    const offcut = Math.max(0, length - used(instance, bar.counts))
+    const named = marked ? { marks: pieces.map((piece) => marks.get(piece)?.shift() ?? '') } : {}
+    return { stock: length, pieces, ...named, offcut: offcut < instance.tolerance ? 0 : offcut }
+  })
+  const cost = costOf(instance, bars)
+  const bought = cut.reduce((sum, bar) => sum + bar.stock, 0)
+  const needed = problem.pieces.reduce((sum, piece) => sum + piece.length * piece.count, 0)
+  const lower = Math.min(bound, cost)
+  return { bars: cut, cost, waste: bought - needed, bound: lower, proven: cost <= lower + slack(lower) }
+}
+
+function compareCounts(a: readonly number[], b: readonly number[]): number {
+  for (let i = 0; i < a.length; i += 1) {
+    const difference = (b[i] ?? 0) - (a[i] ?? 0)
+    if (difference !== 0) return difference
+  }
+  return 0
+}
