@@ -8,8 +8,6 @@ export function proxy(request: NextRequest): NextResponse {
   const policy = contentSecurityPolicy(btoa(crypto.randomUUID()), process.env.NODE_ENV === 'development')
   const headers = new Headers(request.headers)
   headers.set('content-security-policy', policy)
-  // An address that a person was sent to sign in from is passed on by the page itself; see app/_server/session.ts.
-  headers.set('x-panewright-path', request.nextUrl.pathname + request.nextUrl.search)
   const response = NextResponse.next({ request: { headers } })
   response.headers.set('content-security-policy', policy)
   response.headers.set('cache-control', 'no-store')

@@ -1,0 +1,47 @@
+import type { Operation, StoredValues, WorkbookJson } from '@/lib/workbook'
+
+/** A workbook as it is stored: a snapshot and the operations that came after it. The child replays them. */
+export interface StoredState {
+  readonly workbook: WorkbookJson
+  readonly operations: readonly Operation[]
+}
+
+export type Job =
+  | { readonly kind: 'values'; readonly state: StoredState }
+  | {
+      readonly kind: 'xlsx'
+      readonly state: StoredState
+      readonly title: string
+      /** ISO 8601, written into the file's properties. */
+      readonly created: string
+      /** Where the file goes; its folder exists. */
+      readonly path: string
+    }
+
+/** The figures that the list of workbooks shows, in the workbook's own units; null while one cannot be computed. */
+export interface TallyFigures {
+  readonly coveringArea: number | null
+  readonly designHeatLoss: number | null
+  readonly quotationTotal: number | null
+  readonly currency: string | null
+}
+
+export interface JobAnswers {
+  readonly values: {
+    readonly workbook: WorkbookJson
+    readonly values: StoredValues
+    readonly tally: TallyFigures
+  }
+  readonly xlsx: { readonly bytes: number }
+}
+
+export type AnswerOf<J extends Job> = JobAnswers[J['kind']]
+
+export interface JobMessage {
+  readonly id: number
+  readonly job: Job
+}
+
+export type AnswerMessage =
+  | { readonly id: number; readonly ok: true; readonly answer: JobAnswers[keyof JobAnswers] }
+  | { readonly id: number; readonly ok: false; readonly detail: string }
