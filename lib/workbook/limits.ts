@@ -7,6 +7,8 @@ export const limits = {
   formulaLength: 8_192,
   formulaDepth: 64,
   formulaArguments: 255,
+  /** Operators in one formula: a longer chain overruns the stack of a formula parser. */
+  formulaOperators: 500,
   textLength: 32_767,
   noteLength: 4_000,
   sheetNameLength: 31,

@@ -120,6 +120,16 @@ export const operationSchema = z.discriminatedUnion('kind', [
       })
       .nullable(),
   }),
+  /**
+   * Sets how many rows and columns a sheet has; never fewer than hold a cell, a column's width or quantity, or a named value.
+   * It moves nothing, so it is how a sheet that grew by typing goes back without touching what others did there.
+   */
+  z.strictObject({
+    kind: z.literal('set-extent'),
+    sheet: sheetId,
+    rowCount: z.int().min(1).max(limits.rows),
+    columnCount: z.int().min(1).max(limits.columns),
+  }),
   /** Widths and quantities of columns, by index. */
   z.strictObject({
     kind: z.literal('set-columns'),
