@@ -36,3 +36,9 @@ export async function requireActor(request: { readonly headers: Headers }): Prom
   const token = await sessionToken(request.headers)
   return token === undefined ? fail('unauthenticated', 'Sign in to go on.') : actorOf(token)
 }
+
+/** A `set-cookie` value that takes the session cookie away. */
+export function clearedSessionCookie(): string {
+  const { name, secure } = sessionCookie()
+  return `${name}=; Path=/; Max-Age=0; HttpOnly; SameSite=Lax${secure ? '; Secure' : ''}`
+}

@@ -1,0 +1,12 @@
+import { closeDatabase } from '@/db/connection'
+import { closeCalculator } from './calculator/calculator'
+import { log } from './log'
+
+/** On SIGTERM: the calculator's process ends with ours, and the database pool lets its connections go. */
+export function closeOnTerminate(): void {
+  process.once('SIGTERM', () => {
+    log('info', { event: 'closing' })
+    closeCalculator()
+    void closeDatabase()
+  })
+}
