@@ -1,3 +1,4 @@
+import type { UnitSystem } from '@/lib/units'
 import type { Operation, StoredValues, WorkbookJson } from '@/lib/workbook'
 
 /** A workbook as it is stored: a snapshot and the operations that came after it. The child replays them. */
@@ -20,6 +21,7 @@ export type Job =
 
 /** The figures that the list of workbooks shows, in the workbook's own units; null while one cannot be computed. */
 export interface TallyFigures {
+  readonly system: UnitSystem
   readonly coveringArea: number | null
   readonly designHeatLoss: number | null
   readonly quotationTotal: number | null
@@ -27,11 +29,7 @@ export interface TallyFigures {
 }
 
 export interface JobAnswers {
-  readonly values: {
-    readonly workbook: WorkbookJson
-    readonly values: StoredValues
-    readonly tally: TallyFigures
-  }
+  readonly values: { readonly values: StoredValues; readonly tally: TallyFigures }
   readonly xlsx: { readonly bytes: number }
 }
 

@@ -53,7 +53,7 @@ export function ListRow({
         <time dateTime={workbook.changedAt}>{workbook.changed}</time>
         <span className="lg:block lg:truncate">
           <span className="lg:hidden">, </span>
-          {workbook.changedBy}
+          made by {workbook.madeBy}
         </span>
       </p>
       <div className="absolute top-3 right-2 z-10 lg:static">

@@ -8,7 +8,7 @@ export interface ListedWorkbook {
   /** "3 minutes ago" and the moment itself (ISO 8601). */
   readonly changed: string
   readonly changedAt: string
-  readonly changedBy: string
+  readonly madeBy: string
 }
 
 export interface ListedFigure {
