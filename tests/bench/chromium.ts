@@ -1,0 +1,79 @@
+import { readFileSync } from 'node:fs'
+import { join } from 'node:path'
+import { type Browser, chromium, type Page } from 'playwright-core'
+import { projectRoot } from './empty-app'
+import type { RawSource } from './raw-engine'
+
+export function launchChromium(): Promise<Browser> {
+  return chromium.launch({
+    executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium',
+    args: [
+      '--no-sandbox',
+      '--disable-gpu',
+      '--disable-quic',
+      '--disable-background-networking',
+      '--disable-component-update',
+      '--disable-sync',
+      '--no-first-run',
+    ],
+  })
+}
+
+type Address = { sheet: number; row: number; col: number }
+interface PageEngine {
+  setCellContents(address: Address, value: number): unknown
+  getCellValue(address: Address): unknown
+}
+/** What the scripts in the page keep on the window. */
+type RawWindow = Window & {
+  HyperFormula: { buildFromSheets(...args: unknown[]): PageEngine }
+  raw: PageEngine
+}
+
+/** Opens a blank page with HyperFormula's own browser bundle and builds the workbook in it. */
+export async function openRawPage(page: Page, source: RawSource): Promise<number> {
+  const bundle = join(projectRoot, 'node_modules/hyperformula/dist/hyperformula.full.min.js')
+  await page.setContent('<!doctype html><title>raw</title><p id="total"></p>')
+  await page.addScriptTag({ content: readFileSync(bundle, 'utf8') })
+  return page.evaluate((given) => {
+    const { sheets, config, names } = given as never as RawSource
+    const window = globalThis as never as RawWindow
+    const started = performance.now()
+    window.raw = window.HyperFormula.buildFromSheets(sheets, config, names)
+    return performance.now() - started
+  }, source as never)
+}
+
+/** One edit in the raw page, shown as text so that it is painted: the engine's time and the longest gap around it. */
+export function editRawPage(page: Page, address: Address, value: number, shown: Address) {
+  return page.evaluate(
+    async ({ address, value, shown }) => {
+      const { raw } = globalThis as never as RawWindow
+      let longest = 0
+      let last = performance.now()
+      let going = true
+      const channel = new MessageChannel()
+      channel.port1.onmessage = () => {
+        const now = performance.now()
+        longest = Math.max(longest, now - last)
+        last = now
+        if (going) channel.port2.postMessage(0)
+      }
+      channel.port2.postMessage(0)
+      await new Promise((resolve) => setTimeout(resolve, 100))
+      longest = 0
+      last = performance.now()
+      const started = performance.now()
+      raw.setCellContents(address, value)
+      const engine = performance.now() - started
+      const text = document.getElementById('total')
+      if (text) text.textContent = String(raw.getCellValue(shown))
+      await new Promise((resolve) => requestAnimationFrame(() => setTimeout(resolve)))
+      const painted = performance.now() - started
+      await new Promise((resolve) => setTimeout(resolve, 100))
+      going = false
+      return { engine, painted, longest }
+    },
+    { address, value, shown },
+  )
+}
