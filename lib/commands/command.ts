@@ -8,19 +8,27 @@ import type { CellAddress, CellValue, NamedValue, Operation, Workbook } from '..
 export interface Command {
   readonly id: string
   readonly title: string
+  /** The line with its arguments in place: words, and the ids of arguments. Without one, arguments follow the title. */
+  readonly phrase?: readonly PhrasePart[]
   /** Other words that people look it up by. */
   readonly synonyms?: readonly string[]
   readonly group: CommandGroup
   /** Chords such as `Mod+K`, where Mod is Ctrl or Cmd by platform; a test forbids two live commands on one. */
   readonly keys?: readonly string[]
+  /** Where the chords work; `grid` (while the grid has the keyboard) unless it says otherwise. */
+  readonly keysWork?: 'grid' | 'everywhere'
+  /** Makes sense without an open workbook (the workbooks list offers these alone). */
+  readonly anywhere?: boolean
   /** `true`, or the reason why it is not available now. */
   readonly when: (context: CommandContext) => true | string
   readonly arguments?: readonly ArgumentSpec[]
   /** What it would do with these arguments, in a sentence ("Sets Surfaces I2:I3"). */
   readonly says?: (context: CommandContext, args: ArgumentValues) => string
-  /** Arguments are complete and checked when it runs. */
+  /** Arguments are complete when it runs; what no longer fits is refused in words, never thrown. */
   readonly run: (context: CommandContext, args: ArgumentValues) => Effect
 }
+
+export type PhrasePart = string | { readonly argument: string }
 
 export type CommandGroup = 'Estimate' | 'Go to' | 'Edit' | 'Sheet' | 'Workbook' | 'View' | 'Account'
 
@@ -43,6 +51,8 @@ export interface CommandContext {
   readonly named: (name: string) => readonly CellValue[] | undefined
   /** The firm's workbooks that this person may open, most recent first. */
   readonly workbooks: readonly { readonly id: string; readonly title: string; readonly changed: string }[]
+  /** Makes a part of an id that nobody else makes at the same time; without it ids come from names alone. */
+  readonly newId?: () => string
 }
 
 export interface ArgumentOption {
@@ -50,6 +60,8 @@ export interface ArgumentOption {
   readonly title: string
   readonly detail?: string
   readonly synonyms?: readonly string[]
+  /** A figure of the option itself, in the workbook's units ("R" of a covering). */
+  readonly figure?: { readonly label: string; readonly value: number; readonly quantity: Quantity }
 }
 
 /** Asked in place, checked as typed. */
@@ -59,6 +71,8 @@ export type ArgumentSpec =
       readonly id: string
       readonly label: string
       readonly options: (context: CommandContext, args: ArgumentValues) => readonly ArgumentOption[]
+      /** Named results whose change is worth showing beside each option. */
+      readonly compare?: readonly string[]
     }
   | {
       readonly kind: 'quantity'
@@ -71,6 +85,8 @@ export type ArgumentSpec =
       readonly id: string
       readonly label: string
       readonly example: string
+      /** What stands there before anything is typed. */
+      readonly initial?: (context: CommandContext) => string
       /** `undefined` when good, else what was expected. */
       readonly check: (context: CommandContext, text: string, args: ArgumentValues) => string | undefined
     }
@@ -87,7 +103,9 @@ export type Effect =
 export type ViewChange =
   | { readonly kind: 'select'; readonly selection: Selection }
   | { readonly kind: 'undo' | 'redo' | 'edit-cell' | 'edit-note' | 'copy' | 'cut' | 'paste' | 'export-xlsx' }
-  | { readonly kind: 'open-palette' | 'switch-theme' | 'toggle-drawing' | 'sign-out' | 'list-workbooks' }
+  /** The palette, empty or with a command begun. */
+  | { readonly kind: 'open-palette'; readonly command?: string }
+  | { readonly kind: 'switch-theme' | 'toggle-drawing' | 'sign-out' | 'list-workbooks' }
   | { readonly kind: 'open-workbook'; readonly workbook: string }
   | {
       readonly kind: 'new-workbook'
