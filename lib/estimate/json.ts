@@ -1,0 +1,4 @@
+/** A plain JSON object; arrays and null are none. */
+export function isRecord(value: unknown): value is Readonly<Record<string, unknown>> {
+  return typeof value === 'object' && value !== null && !Array.isArray(value)
+}

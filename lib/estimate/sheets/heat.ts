@@ -1,0 +1,132 @@
+import { computed, constant, heading, input, lines, lookUp, type SheetDeclaration } from '../declare'
+
+const method = 'ASABE EP406; NRAES-33'
+
+/**
+ * H2 Design heat loss is conduction, infiltration and perimeter loss at design temperatures, never below nothing.
+ * H3 The heat capacity of air is stated once, as 0.018 Btu/(ft³·°F), and converted exactly.
+ */
+export const heat: SheetDeclaration = {
+  id: 'heat',
+  name: 'Heat',
+  kind: 'step',
+  about: 'What the house loses on the coldest night, and the heater that it needs.',
+  blocks: [
+    lines(
+      heading('Given'),
+      input({
+        name: 'air_changes_per_hour',
+        label: 'Air changes',
+        quantity: 'air-changes',
+        value: 1,
+        limits: { min: 0, max: 100 },
+        source: 'ASABE EP406, from memory',
+        note: 'New glass 0.75 to 1.5; new double film 0.5 to 1.0; old glass 1 to 4.',
+      }),
+      input({
+        name: 'perimeter_heat_loss_factor',
+        label: 'Perimeter heat loss factor',
+        quantity: 'linear-conductance',
+        value: 0.8,
+        limits: { min: 0, max: 10 },
+        source: 'ASABE EP406; NRAES-33, from memory',
+        note: '0.8 Btu/(h·ft·°F) with a bare edge, 0.4 with edge insulation.',
+      }),
+      input({
+        name: 'screen_resistance',
+        label: 'Resistance of the night screen',
+        quantity: 'thermal-resistance',
+        value: 0,
+        limits: { min: 0, max: 1000 },
+        source: 'estimator’s choice',
+        note: '0 without a screen; Surfaces says which ones it covers.',
+      }),
+      input({
+        name: 'heater_allowance',
+        label: 'Heater allowance',
+        quantity: 'ratio',
+        value: 0.25,
+        limits: { min: 0, max: 1 },
+        source: 'common practice, no source',
+      }),
+      constant({
+        name: 'air_heat_capacity',
+        label: 'Heat capacity of air by volume',
+        quantity: 'volumetric-heat-capacity',
+        value: 0.018,
+        digits: 4,
+        source: '0.075 lb/ft³ × 0.24 Btu/(lb·°F)',
+      }),
+      heading('Design heat loss'),
+      computed({
+        name: 'design_temperature_difference',
+        label: 'Inside above outside',
+        quantity: 'temperature-difference',
+        formula: '=MAX(0,inside_night_temperature-outside_design_temperature)',
+        source: method,
+      }),
+      computed({
+        name: 'conduction_loss',
+        label: 'Conduction',
+        quantity: 'heat-rate',
+        formula: '=envelope_conductance*design_temperature_difference',
+        source: method,
+      }),
+      computed({
+        name: 'infiltration_loss',
+        label: 'Infiltration',
+        quantity: 'heat-rate',
+        formula: '=air_heat_capacity*enclosed_volume*air_changes_per_hour*design_temperature_difference',
+        source: method,
+      }),
+      computed({
+        name: 'perimeter_loss',
+        label: 'Perimeter',
+        quantity: 'heat-rate',
+        formula: '=perimeter_heat_loss_factor*perimeter_length*design_temperature_difference',
+        source: method,
+      }),
+      computed({
+        name: 'design_heat_loss',
+        label: 'Design heat loss',
+        quantity: 'heat-rate',
+        formula: '=conduction_loss+infiltration_loss+perimeter_loss',
+        source: method,
+        total: true,
+      }),
+      computed({
+        name: 'heater_output',
+        label: 'Heater output',
+        quantity: 'heat-rate',
+        formula: '=design_heat_loss*(1+heater_allowance)',
+        source: 'common practice, no source',
+      }),
+      heading('Fuel'),
+      input({
+        name: 'fuel',
+        label: 'Fuel',
+        quantity: 'text',
+        value: 'NATURAL-GAS',
+        choices: 'fuels',
+        source: 'estimator’s choice',
+      }),
+      input({
+        name: 'fuel_price',
+        label: 'Fuel price',
+        quantity: 'money',
+        value: `=${lookUp('fuels', 'fuel', 'price')}`,
+        limits: { min: 0, max: 1e6 },
+        unit: `=currency&"/"&${lookUp('fuels', 'fuel', 'unit')}`,
+        source: 'Fuels, unless typed here',
+      }),
+      input({
+        name: 'heater_efficiency',
+        label: 'Heater efficiency',
+        quantity: 'ratio',
+        value: `=${lookUp('fuels', 'fuel', 'efficiency')}`,
+        limits: { above: 0, max: 1 },
+        source: 'Fuels, unless typed here',
+      }),
+    ),
+  ],
+}

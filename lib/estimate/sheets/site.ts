@@ -1,0 +1,130 @@
+import { grid, input, lines, type SheetDeclaration } from '../declare'
+
+const demo = 'invented (demo)'
+
+export const months = [
+  'January',
+  'February',
+  'March',
+  'April',
+  'May',
+  'June',
+  'July',
+  'August',
+  'September',
+  'October',
+  'November',
+  'December',
+] as const
+
+const meanTemperature = [24, 27, 36, 48, 59, 68, 73, 71, 63, 52, 40, 29]
+const irradiation = [570, 830, 1140, 1440, 1740, 1900, 1880, 1640, 1300, 910, 600, 480]
+const reflectance = [0.4, 0.4, 0.3, 0.2, 0.2, 0.2, 0.2, 0.2, 0.2, 0.2, 0.2, 0.3]
+
+export const site: SheetDeclaration = {
+  id: 'site',
+  name: 'Site',
+  kind: 'step',
+  about: 'The climate that the house stands in, and how it is turned.',
+  blocks: [
+    lines(
+      input({
+        name: 'latitude',
+        label: 'Latitude',
+        quantity: 'angle',
+        value: 42,
+        limits: { min: -66, max: 66 },
+        source: demo,
+        note: 'North is positive.',
+      }),
+      input({
+        name: 'site_elevation',
+        label: 'Elevation of the site',
+        quantity: 'length',
+        value: 500,
+        limits: { min: -500, max: 6000, in: 'si' },
+        source: demo,
+      }),
+      input({
+        name: 'ridge_azimuth',
+        label: 'Ridge azimuth',
+        quantity: 'angle',
+        value: 90,
+        limits: { min: 0, max: 360 },
+        source: demo,
+        note: 'Clockwise from north; a ridge running east-west is 90. The front faces this plus 90°.',
+      }),
+      input({
+        name: 'outside_design_temperature',
+        label: 'Outside design temperature',
+        quantity: 'temperature',
+        value: 0,
+        limits: { min: -60, max: 50, in: 'si' },
+        source: demo,
+        note: 'The 99 % value of the nearest weather station is usual.',
+      }),
+      input({
+        name: 'inside_night_temperature',
+        label: 'Inside temperature at night',
+        quantity: 'temperature',
+        value: 55,
+        limits: { min: -60, max: 60, in: 'si' },
+        source: demo,
+      }),
+      input({
+        name: 'inside_day_temperature',
+        label: 'Inside temperature by day',
+        quantity: 'temperature',
+        value: 65,
+        limits: { min: -60, max: 60, in: 'si' },
+        source: demo,
+      }),
+    ),
+    grid({
+      columns: [
+        { title: 'Month', quantity: 'text', ground: 'label' },
+        {
+          title: 'Mean temperature',
+          quantity: 'temperature',
+          ground: 'input',
+          named: {
+            name: 'monthly_mean_temperature',
+            role: 'input',
+            label: 'Monthly mean temperature',
+            limits: { min: -60, max: 60, in: 'si' },
+          },
+        },
+        {
+          title: 'Irradiation',
+          quantity: 'irradiation',
+          ground: 'input',
+          named: {
+            name: 'monthly_irradiation',
+            role: 'input',
+            label: 'Monthly irradiation on the horizontal, a day',
+            limits: { min: 0, max: 15, in: 'si' },
+          },
+        },
+        { title: 'Source', quantity: 'text', ground: 'label' },
+        {
+          title: 'Ground reflectance',
+          quantity: 'ratio',
+          ground: 'input',
+          named: {
+            name: 'monthly_ground_reflectance',
+            role: 'input',
+            label: 'Monthly ground reflectance',
+            limits: { min: 0, max: 1 },
+          },
+        },
+      ],
+      rows: months.map((month, index) => ({
+        Month: month,
+        'Mean temperature': meanTemperature[index] ?? 0,
+        Irradiation: irradiation[index] ?? 0,
+        Source: 'invented (demo), like 42° N inland',
+        'Ground reflectance': reflectance[index] ?? 0,
+      })),
+    }),
+  ],
+}
