@@ -7,7 +7,7 @@ import type { Area, NamedValue, Row, Sheet, Workbook } from '../model'
 import type { CellPatch, Operation } from '../operations'
 import { rewriteFormulas } from './formulas'
 import { nameTarget } from './names'
-import { type Apply, countCells, findSheet, keepCount, setCells } from './parts'
+import { type Apply, countCells, findSheet, keepCount, type OperationOf, setCells } from './parts'
 import { wholePatch } from './set-cells'
 
 /**
@@ -199,4 +199,24 @@ export function rearranged<T>(list: readonly T[], lines: LineChange, blank: T): 
 
 function appendBlank<T>(list: T[], count: number, blank: T): void {
   for (let added = 0; added < count; added += 1) list.push(blank)
+}
+
+export type LineOperation = OperationOf<'insert-lines' | 'remove-lines' | 'move-lines'>
+
+export function isLineOperation(operation: Operation): operation is LineOperation {
+  return (
+    operation.kind === 'insert-lines' || operation.kind === 'remove-lines' || operation.kind === 'move-lines'
+  )
+}
+
+export function lineChangeOf(operation: LineOperation): LineChange {
+  const { at, count } = operation
+  switch (operation.kind) {
+    case 'insert-lines':
+      return { kind: 'insert', at, count }
+    case 'remove-lines':
+      return { kind: 'remove', at, count }
+    case 'move-lines':
+      return { kind: 'move', at, count, to: operation.to }
+  }
 }
