@@ -1,0 +1,2 @@
+export { writeXlsx, type XlsxOptions } from './write-xlsx'
+export type { XlsxStream } from './writer'
