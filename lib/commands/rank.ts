@@ -69,45 +69,55 @@ interface Query {
 interface Prepared {
   readonly text: string
   readonly words: readonly string[]
+  readonly initials: string
 }
 
-const prepared = new WeakMap<Rankable, readonly Prepared[]>()
+interface PreparedEntry {
+  readonly texts: readonly Prepared[]
+  /** The words of all its texts, each once. */
+  readonly words: readonly string[]
+}
 
-function prepare(entry: Rankable): readonly Prepared[] {
+const prepared = new WeakMap<Rankable, PreparedEntry>()
+
+/** Entries live as long as the palette is open, and are asked again at every key. */
+function prepare(entry: Rankable): PreparedEntry {
   const known = prepared.get(entry)
   if (known) return known
   const texts = [entry.title, ...(entry.also ?? [])].map((text) => {
     const folded = fold(text)
     const words = wordsOf(folded)
-    return { text: folded.includes('_') ? words.join(' ') : folded, words }
+    const initials = words.map((word) => word[0] ?? '').join('')
+    return { text: folded.includes('_') ? words.join(' ') : folded, words, initials }
   })
-  prepared.set(entry, texts)
-  return texts
+  const made = { texts, words: [...new Set(texts.flatMap(({ words }) => words))] }
+  prepared.set(entry, made)
+  return made
 }
 
 /** 0 for no match, else up to 100. */
 function matchOf(entry: Rankable, query: Query): number {
+  const { texts, words } = prepare(entry)
   let best = 0
-  const texts = prepare(entry)
-  texts.forEach((text, index) => {
-    const score = matchText(text, query) * (index === 0 ? 1 : 0.96)
+  for (let index = 0; index < texts.length; index++) {
+    const text = texts[index]
+    const score = text ? matchText(text, query) * (index === 0 ? 1 : 0.96) : 0
     if (score > best) best = score
-  })
+  }
   if (best >= 40) return best
   // Words may also be spread over the title and the other words ("triple TP16").
-  const every = new Set(texts.flatMap((text) => text.words))
-  return Math.max(best, matchLoosely([...every], query.words))
+  return Math.max(best, matchLoosely(words, query.words))
 }
 
-function matchText({ text, words }: Prepared, query: Query): number {
+function matchText({ text, words, initials }: Prepared, query: Query): number {
   if (text === query.text) return 100
   const closeness = query.text.length / Math.max(text.length, query.text.length)
   if (text.startsWith(`${query.text} `)) return 91 + 4 * closeness
   if (text.startsWith(query.text)) return 86 + 4 * closeness
-  if (` ${text}`.includes(` ${query.text}`)) return 80 + 6 * closeness
+  if (text.includes(` ${query.text}`)) return 80 + 6 * closeness
   const order = prefixMatch(words, query.words)
   if (order > 0) return order + 6 * closeness
-  if (query.text.length >= 2 && initials(words).startsWith(query.text)) return 60
+  if (query.text.length >= 2 && initials.startsWith(query.text)) return 60
   if (query.text.length >= 3 && text.includes(query.text)) return 52 + 6 * closeness
   return 0
 }
@@ -127,10 +137,6 @@ function prefixMatch(words: readonly string[], asked: readonly string[]): number
     from = at + 1
   }
   return inOrder ? 72 : 64
-}
-
-function initials(words: readonly string[]): string {
-  return words.map((word) => word[0] ?? '').join('')
 }
 
 /** Every word begins a word, stands within one, or is a typo of one: at most 48. */

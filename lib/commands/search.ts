@@ -1,19 +1,22 @@
 import type { CommandContext } from './command'
 import { type Entry, entriesFor } from './entries'
 import { type RankOptions, rank } from './rank'
-import { typedEntries } from './typed'
+import { type RankableInput, rankableInputs, typedEntries } from './typed'
 
 /** What the palette searches; made once when it opens. */
 export interface CommandIndex {
   readonly context: CommandContext
   readonly entries: readonly Entry[]
+  /** What may be set by typing its name and a value. */
+  readonly inputs: readonly RankableInput[]
   /** By the command and arguments that an entry stands for. */
   readonly byDeed: ReadonlyMap<string, Entry>
 }
 
 export function makeIndex(context: CommandContext): CommandIndex {
   const entries = entriesFor(context)
-  return { context, entries, byDeed: new Map(entries.map((entry) => [deedOf(entry), entry])) }
+  const byDeed = new Map(entries.map((entry) => [deedOf(entry), entry]))
+  return { context, entries, inputs: rankableInputs(context), byDeed }
 }
 
 /**
@@ -27,7 +30,7 @@ export function searchCommands(
 ): readonly Entry[] {
   if (query.trim() === '') return emptyQuery(index, recent, limit)
   const matched = rank(index.entries, query, { limit, recent })
-  const typed = typedEntries(index.context, query).map((entry) => knownAs(index, entry))
+  const typed = typedEntries(index.context, query, index.inputs).map((entry) => knownAs(index, entry))
   const between = (from: number, below: number) =>
     matched.filter(({ match }) => match >= from && match < below).map(({ entry }) => entry)
   const ordered = [

@@ -1,8 +1,9 @@
+import type { NamedValue } from '../workbook'
 import { checkArgument, rankOptions, sayCommand } from './arguments'
 import type { ArgumentSpec, ArgumentValues, Command, CommandContext } from './command'
 import type { Entry } from './entries'
 import { labelOf, namedInputs } from './inputs'
-import { rank } from './rank'
+import { type Rankable, rank } from './rank'
 import { readReference } from './references'
 import { commandById, commandsFor } from './registry'
 import { choicesOf } from './tables'
@@ -12,13 +13,17 @@ import { fold, wordsOf } from './words'
  * Arguments typed in the line itself: `frame width 24'`, `cover roof triple`, `b7`. Each reading becomes an entry
  * with its arguments filled in and checked; what does not hold is said in `problem` and cannot run.
  */
-export function typedEntries(context: CommandContext, query: string): readonly Entry[] {
+export function typedEntries(
+  context: CommandContext,
+  query: string,
+  inputs: readonly RankableInput[] = rankableInputs(context),
+): readonly Entry[] {
   const text = query.trim()
   if (text === '') return []
   return [
     ...readCell(context, text),
     ...readCover(context, text),
-    ...readSet(context, text),
+    ...readSet(context, text, inputs),
     ...readAfterTitle(context, text),
   ]
 }
@@ -65,17 +70,24 @@ function readCell(context: CommandContext, text: string): readonly Entry[] {
 const setWords = /^(?:set|change|make|put|enter)\s+(?:the\s+)?/i
 const valueStart = /^[-+−]?(?:[\d.,]*\d|[=$€£])|^[ru][-\s]?\d/i
 
-/** `[set] NAME [to] VALUE`: the value begins at a number, or is one of the choices that the named input takes. */
-function readSet(context: CommandContext, text: string): readonly Entry[] {
-  const command = usable(context, 'set-input')
-  if (!command) return []
-  const asked = text.replace(setWords, '')
-  const inputs = namedInputs(context).map((named) => ({
+export interface RankableInput extends Rankable {
+  readonly named: NamedValue
+}
+
+export function rankableInputs(context: CommandContext): readonly RankableInput[] {
+  return namedInputs(context).map((named) => ({
     id: named.name,
     title: labelOf(named),
     also: [named.name],
     named,
   }))
+}
+
+/** `[set] NAME [to] VALUE`: the value begins at a number, or is one of the choices that the named input takes. */
+function readSet(context: CommandContext, text: string, inputs: readonly RankableInput[]): readonly Entry[] {
+  const command = usable(context, 'set-input')
+  if (!command) return []
+  const asked = text.replace(setWords, '')
   const found: { entry: Entry; score: number }[] = []
   for (const { name, value } of splits(asked)) {
     for (const { entry: input, score } of rank(inputs, name, { limit: 3 })) {

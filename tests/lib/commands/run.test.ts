@@ -114,7 +114,7 @@ describe('set a named input', () => {
     ['frame_width', `24' 6"`, `24' 6" = 7.468 m`],
     ['frame_width', '7.5 m', `7.5 m = 24' 7 1/4"`],
     ['frame_width', '300 in', `300 in = 25' 0" = 7.620 m`],
-    ['ground_snow_load', '40 psf', '40 psf = 1.92 kPa'],
+    ['ground_snow_load', '40 psf', '40 psf = 1.915 kPa'],
     ['inside_night_temperature', '-10 °F', '-10 °F = -23.3 °C'],
     ['inside_night_temperature', '10 °C', '10 °C = 50.0 °F'],
     ['waste_allowance', '0.125', '0.125 = 12.5%'],
