@@ -23,7 +23,7 @@ export function foundFirm(firm: NewFirm): Promise<Result<void>> {
     if (!hashed.ok) return hashed
     try {
       await withFirm(database(), firm.id, async (trx) => {
-        if (!(await insertFirm(trx, { id: firm.id, name: firm.name }))) throw new Taken('firm')
+        if (!(await insertFirm(trx, { id: firm.id, name: firm.name }))) throw new Taken('id', 'id')
         const owner = {
           firmId: firm.id,
           id: firm.owner.id,
@@ -32,11 +32,11 @@ export function foundFirm(firm: NewFirm): Promise<Result<void>> {
           role: 'owner' as const,
           passwordHash: hashed.value,
         }
-        if (!(await insertMember(trx, owner))) throw new Taken('e-mail address')
+        if (!(await insertMember(trx, owner))) throw new Taken('email', 'e-mail address')
       })
       return succeed(undefined)
     } catch (error) {
-      if (error instanceof Taken) return fail('invalid', error.message)
+      if (error instanceof Taken) return fail('invalid', error.message, { name: error.part })
       throw error
     }
   })
@@ -44,7 +44,10 @@ export function foundFirm(firm: NewFirm): Promise<Result<void>> {
 
 /** Thrown inside the transaction so that it rolls back; never leaves this file. */
 class Taken extends Error {
-  constructor(what: string) {
-    super(`There is such a ${what} already.`)
+  constructor(
+    readonly part: 'id' | 'email',
+    what: string,
+  ) {
+    super(`Another firm has that ${what} already.`)
   }
 }

@@ -94,7 +94,7 @@ export function createWorkbook(
     return withFirm(database(), firmId, async (trx) => {
       const at = now().toISOString()
       const made = await insertWorkbook(trx, { firmId, id, title, createdBy: actor.memberId, at })
-      if (!made) return fail('invalid', 'There is a workbook with that id already.')
+      if (!made) return fail('invalid', 'There is a workbook with that id already.', { name: 'id' })
       await upsertSnapshot(trx, { firmId, workbookId: id, seq: 0, body })
       return succeed({ id })
     })

@@ -15,9 +15,9 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       if not exists (select from pg_roles where rolname = 'panewright_door') then
         create role panewright_door nologin;
       end if;
-      -- To hand functions to the door, and to act as the application, the owner must belong to both.
-      if not pg_has_role(current_user, 'panewright_door', 'member') then
-        execute format('grant panewright_door to %I', current_user);
+      -- So that an owner's connection can put the application's role on.
+      if not pg_has_role(current_user, 'panewright_app', 'member') then
+        execute format('grant panewright_app to %I', current_user);
       end if;
     end $$
   `.execute(db)

@@ -109,7 +109,16 @@ const signatures = [
 ]
 
 async function handOver(db: Kysely<unknown>): Promise<void> {
-  // A function's new owner must for that moment be allowed to create in its schema.
+  // For that moment the owner must belong to the door, and the door be allowed to create. It must not last: members of
+  // the door see what the door sees.
+  await sql`
+    do $$
+    begin
+      if not pg_has_role(current_user, 'panewright_door', 'member') then
+        execute format('grant panewright_door to %I', current_user);
+      end if;
+    end $$
+  `.execute(db)
   await sql`grant create on schema public to panewright_door`.execute(db)
   for (const signature of signatures) {
     await sql`revoke all on function ${sql.raw(signature)} from public`.execute(db)
@@ -117,4 +126,5 @@ async function handOver(db: Kysely<unknown>): Promise<void> {
     await sql`alter function ${sql.raw(signature)} owner to panewright_door`.execute(db)
   }
   await sql`revoke create on schema public from panewright_door`.execute(db)
+  await sql`revoke panewright_door from current_user`.execute(db)
 }
