@@ -96,3 +96,14 @@ export const templateChecks: readonly TemplateCheck[] = steps().flatMap((sheet) 
       : [],
   ),
 )
+
+/** Names of single lines, whose unit stands beside them. */
+export const lineNames: ReadonlySet<string> = new Set(
+  steps().flatMap((sheet) =>
+    sheet.blocks.flatMap((block) =>
+      block.kind === 'lines'
+        ? block.lines.flatMap((line) => (line.kind === 'heading' ? [] : [line.name]))
+        : [],
+    ),
+  ),
+)
