@@ -41,6 +41,7 @@ const upTo: Readonly<Partial<Record<UnitKind, number>>> = {
   years: 1,
   hours: 2,
   number: 4,
+  text: 4,
 }
 
 export function digitsOf(quantity: Quantity, system: UnitSystem, asked: number | undefined): Digits {

@@ -23,6 +23,7 @@ describe('[N5] printed quantities', () => {
     [0.3, 'ratio', 'us', '30.0%'],
     [12, 'count', 'us', '12'],
     [12.5, 'count', 'us', '12.5'],
+    [12.25, 'text', 'us', '12.25'],
     [6.5e-5, 'expansion', 'si', '6.50e-5 /K'],
     [0.75, 'air-changes', 'us', '0.75 /h'],
     [1, 'boolean', 'us', 'yes'],
