@@ -51,7 +51,7 @@ const files: Record<string, string> = {
   'next.config.mjs': `export default { turbopack: { root: ${JSON.stringify(projectRoot)} }, poweredByHeader: false, typescript: { ignoreBuildErrors: true } }\n`,
   'tsconfig.json': '{ "compilerOptions": { "jsx": "react-jsx" }, "include": ["**/*.ts"] }\n',
   'app/layout.jsx':
-    "export const metadata = { title: 'Empty' }\nexport default function Layout({ children }) {\n  return <html lang=\"en\"><body>{children}</body></html>\n}\n",
+    'export const metadata = { title: \'Empty\' }\nexport default function Layout({ children }) {\n  return <html lang="en"><body>{children}</body></html>\n}\n',
   'app/page.jsx': "import { Count } from './count'\nexport default function Page() { return <Count /> }\n",
   'app/count.jsx':
     "'use client'\nimport { useState } from 'react'\nexport function Count() {\n  const [n, setN] = useState(0)\n  return <button type=\"button\" onClick={() => setN(n + 1)}>{n}</button>\n}\n",

@@ -1,5 +1,6 @@
 import type { CellValue, Operation, Workbook } from '@/lib/workbook'
 import { createEngine } from '@/lib/workbook/engine'
+import { engineConfig } from '@/lib/workbook/engine/config'
 import { answer, childArgument } from './child'
 import type { EngineTimes } from './engine-times'
 import { buildRaw, rawAddress, rawSource } from './raw-engine'
@@ -18,7 +19,7 @@ interface Driver {
 }
 
 function rawDriver(workbook: Workbook): Driver {
-  const source = rawSource(workbook)
+  const source = rawSource(workbook, engineConfig)
   let raw: ReturnType<typeof buildRaw>
   return {
     build: () => {

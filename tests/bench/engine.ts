@@ -43,7 +43,11 @@ function linesOf(what: SubjectName, raw: readonly EngineTimes[], app: readonly E
     minimum(times.map((one) => median(one.edits[kind])))
   const build = (times: readonly EngineTimes[]) => minimum(times.map((one) => one.build))
   const title = typeof what === 'number' ? `${what / 1000}k cells` : 'seeded workbook'
-  const against = (name: string, most: number | undefined, of: (times: readonly EngineTimes[]) => number): Line => ({
+  const against = (
+    name: string,
+    most: number | undefined,
+    of: (times: readonly EngineTimes[]) => number,
+  ): Line => ({
     section: 'engine',
     what: `${title}: ${name}, app to raw`,
     value: of(app) / of(raw),

@@ -83,7 +83,13 @@ function named(
   role: NamedValue['role'],
   quantity: NamedValue['quantity'],
 ): NamedValue {
-  return { name, area: { sheet: sheet.id, row, column: 1, rowCount: 1, columnCount: 1 }, quantity, role, label: name }
+  return {
+    name,
+    area: { sheet: sheet.id, row, column: 1, rowCount: 1, columnCount: 1 },
+    quantity,
+    role,
+    label: name,
+  }
 }
 
 const tableName = (i: number) => `price_table_${i + 1}`
@@ -149,7 +155,8 @@ function summarySheet(takeOffs: readonly Sheet[]): Sheet {
 function sheetOf(id: string, name: string, kind: Sheet['kind'], rows: CellInput[][]): Sheet {
   const cell = (input: CellInput, row: number): Cell => {
     if (row === 0) return { input, ground: 'label' }
-    if (typeof input !== 'number') return { input, ...(typeof input === 'string' && { format: { digits: 2 } }) }
+    if (typeof input !== 'number')
+      return { input, ...(typeof input === 'string' && { format: { digits: 2 } }) }
     return { input, ground: kind === 'table' ? 'table' : 'input', format: { quantity: 'number', digits: 2 } }
   }
   return {

@@ -52,6 +52,8 @@ export function printLines(lines: readonly Line[]): void {
   ]
   const widths = table[0]?.map((_, i) => Math.max(...table.map((cells) => cells[i]?.length ?? 0))) ?? []
   for (const cells of table) {
-    console.log(cells.map((text, i) => (i === cells.length - 1 ? text : text.padEnd(widths[i] ?? 0))).join('  '))
+    console.log(
+      cells.map((text, i) => (i === cells.length - 1 ? text : text.padEnd(widths[i] ?? 0))).join('  '),
+    )
   }
 }

@@ -32,7 +32,8 @@ export function setNumber(place: Place, input: number): Operation {
 
 export function countCells(workbook: Workbook): number {
   return workbook.sheets.reduce(
-    (sum, sheet) => sum + sheet.rows.reduce((inSheet, row) => inSheet + (row?.filter(Boolean).length ?? 0), 0),
+    (sum, sheet) =>
+      sum + sheet.rows.reduce((inSheet, row) => inSheet + (row?.filter(Boolean).length ?? 0), 0),
     0,
   )
 }
