@@ -23,6 +23,8 @@ import { describeError, stoppedError } from './sentences'
 export interface EngineOptions {
   /** Formula texts that are not computed because they were stopped before. */
   readonly stopped?: Iterable<string>
+  /** Told why the formula engine had to be built anew, for the log. */
+  readonly onRebuild?: (cause: unknown) => void
 }
 
 /**
@@ -33,7 +35,7 @@ export interface EngineOptions {
  * E11 After any list of operations the values are those of an engine built from the final model.
  */
 export function createEngine(source: Workbook | WorkbookJson, options: EngineOptions = {}): Engine {
-  return new WorkbookEngine(source, new Set(options.stopped))
+  return new WorkbookEngine(source, new Set(options.stopped), options.onRebuild ?? ignore)
 }
 
 /** A value of the formula engine, or the error of a formula that it never got. */
@@ -52,6 +54,7 @@ class WorkbookEngine implements Engine {
   constructor(
     source: Workbook | WorkbookJson,
     private readonly stopped: Set<string>,
+    private readonly onRebuild: (cause: unknown) => void,
   ) {
     this.workbook = fromJson(isWorkbook(source) ? toJson(source) : source)
     this.rebuild([])
@@ -171,10 +174,10 @@ class WorkbookEngine implements Engine {
     if (this.grid) {
       try {
         const follower = { grid: this.grid, workbook: this.workbook, stopped: this.stopped }
-        followOperation(follower, operation, touched, names, changes)
-        return
-      } catch {
+        if (followOperation(follower, operation, touched, names, changes)) return
+      } catch (cause) {
         // The formula engine is in an unknown state: it is built anew below.
+        this.onRebuild(cause)
       }
     }
     this.rebuild(touched)
@@ -221,7 +224,14 @@ class WorkbookEngine implements Engine {
   private raw(address: CellAddress): Raw {
     if (!this.grid) return withoutEngine(cellAt(this.workbook, address)?.input)
     const at = engineAddress(this.grid, address)
-    return at ? this.grid.formulas.getCellValue(at) : null
+    if (!at) return null
+    try {
+      return this.grid.formulas.getCellValue(at)
+    } catch (cause) {
+      this.onRebuild(cause)
+      this.rebuild([])
+      return this.grid ? this.grid.formulas.getCellValue(at) : withoutEngine(cellAt(this.workbook, address)?.input)
+    }
   }
 
   private add(packer: ChangePacker, address: CellAddress, value: Raw): void {

@@ -1,8 +1,9 @@
 import { ExportedCellChange, type ExportedChange } from 'hyperformula'
 import { isLineOperation, type LineOperation } from '../apply/lines'
 import type { CellAddress } from '../contracts'
+import { mentionsSheet } from '../formula/rewrite'
 import { cellAt, sheetById } from '../lookup'
-import type { NamedValue, Workbook } from '../model'
+import { isFormula, type NamedValue, type Workbook } from '../model'
 import type { Operation } from '../operations'
 import { encode } from './encode'
 import { engineAddress, type Grid, nameExpression, register } from './grid'
@@ -20,8 +21,9 @@ export type Visit = (address: CellAddress, value: ExportedCellChange['newValue']
  * Brings the engine to where the model is after one operation, by its own incremental means, and reports what changed.
  *
  * E8  Rows and columns are inserted and removed by the engine itself. It leaves lines beyond its own used extent alone and
- *     resolves OFFSET when it parses, so cells that the model rewrote are set anew where that matters.
+ *     resolves OFFSET when it parses, so the formulas that this concerns are set anew from the model.
  * E9  Moved lines, removed and renamed sheets: every cell that the model rewrote or moved is set from the model.
+ *     A sheet renamed to what formulas already wait for is not followed: the caller builds anew (false).
  */
 export function followOperation(
   follower: Follower,
@@ -29,12 +31,39 @@ export function followOperation(
   touched: readonly CellAddress[],
   namesBefore: ReadonlyMap<string, NamedValue>,
   visit: Visit,
-): void {
+): boolean {
   const { grid } = follower
+  if (operation.kind === 'rename-sheet' && isAwaited(follower.workbook, operation.name, touched)) return false
   const changes = grid.formulas.batch(() => {
     change(follower, operation, touched, namesBefore)
   })
   report(grid, changes, visit)
+  return true
+}
+
+/** Whether formulas that the renaming did not touch already named the sheet by its new name. */
+function isAwaited(workbook: Workbook, name: string, touched: readonly CellAddress[]): boolean {
+  const renamed = new Set(touched.map(({ sheet, row, column }) => `${sheet} ${row} ${column}`))
+  for (const { sheet, row, column } of formulasWith(workbook, name)) {
+    const input = cellAt(workbook, { sheet, row, column })?.input
+    if (!renamed.has(`${sheet} ${row} ${column}`) && isFormula(input) && mentionsSheet(input, name))
+      return true
+  }
+  return false
+}
+
+/** Cells whose formula holds a word, whatever its case. */
+function* formulasWith(workbook: Workbook, word: string): Generator<CellAddress> {
+  const wanted = word.toLowerCase()
+  for (const sheet of workbook.sheets) {
+    for (const [row, cells] of sheet.rows.entries()) {
+      for (const [column, cell] of (cells ?? []).entries()) {
+        if (isFormula(cell?.input) && cell.input.toLowerCase().includes(wanted)) {
+          yield { sheet: sheet.id, row, column }
+        }
+      }
+    }
+  }
 }
 
 export function report(grid: Grid, changes: readonly ExportedChange[], visit: Visit): void {
@@ -55,6 +84,7 @@ function change(
   const { formulas } = grid
   if (isLineOperation(operation)) {
     changeLines(follower, operation, touched)
+    setFromModel(follower, formulasWith(follower.workbook, 'offset('))
     changeNames(follower, namesBefore)
     return
   }

@@ -4,6 +4,7 @@ import {
   applyOperation,
   type CellValue,
   type Engine,
+  fromJson,
   isCellError,
   ValueCache,
   type Workbook,
@@ -43,7 +44,8 @@ describe('the live engine', () => {
       fc.property(
         workbook,
         fc.array(fc.array(operation, { minLength: 1, maxLength: 3 }), { minLength: 1, maxLength: 6 }),
-        (book, batches) => {
+        (json, batches) => {
+          const book = fromJson(json)
           const live = createEngine(book)
           const cache = new ValueCache()
           cache.applyPacked(live.all())
