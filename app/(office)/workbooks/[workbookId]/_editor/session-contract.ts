@@ -17,10 +17,19 @@ export type EngineStatus =
 /** Immutable; a new object whenever anything a screen shows has changed. */
 export interface SessionSnapshot {
   readonly version: number
+  /** Counts changes of shape (lines, sheets, names, columns): what the grid lays out anew for. */
+  readonly shape: number
   readonly save: SaveStatus
   readonly engine: EngineStatus
   readonly undoLabel: string | undefined
   readonly redoLabel: string | undefined
+}
+
+/** Cells whose values changed, read without making an object of each: one edit can change tens of thousands. */
+export interface ValueChanges {
+  /** Ids of the sheets that changes lie on. */
+  readonly sheets: readonly string[]
+  visit(sheet: string, visit: (row: number, column: number) => void): void
 }
 
 /** One open workbook in one browser tab: the model, its values, the queue of unsaved operations, undo. */
@@ -45,7 +54,7 @@ export interface WorkbookSession {
     operations: readonly Operation[],
     names: readonly string[],
   ): Promise<Readonly<Record<string, readonly CellValue[]>>>
-  /** Cells whose values changed since the listener was added. */
-  onValues(listener: (cells: readonly CellAddress[]) => void): () => void
+  /** Called with the cells whose values changed, as they change. */
+  onValues(listener: (changes: ValueChanges) => void): () => void
   close(): void
 }

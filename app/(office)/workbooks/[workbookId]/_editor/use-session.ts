@@ -1,0 +1,13 @@
+import { useSyncExternalStore } from 'react'
+import type { SessionSnapshot, WorkbookSession } from './session-contract'
+import type { EditorView, ViewSnapshot } from './view-state'
+
+/** The part of the session that screens show; renders again when it changes. */
+export function useSession(session: WorkbookSession): SessionSnapshot {
+  const read = () => session.snapshot()
+  return useSyncExternalStore((listener) => session.subscribe(listener), read, read)
+}
+
+export function useView(view: EditorView): ViewSnapshot {
+  return useSyncExternalStore(view.subscribe, view.snapshot, view.snapshot)
+}

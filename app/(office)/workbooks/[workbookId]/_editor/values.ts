@@ -1,0 +1,97 @@
+import {
+  type CellAddress,
+  type CellInput,
+  type CellValue,
+  cellAt,
+  isFormula,
+  type Operation,
+  type PackedChanges,
+  type StoredValues,
+  ValueCache,
+  type Workbook,
+} from '@/lib/workbook'
+import type { ValueChanges } from './session-contract'
+
+/**
+ * The values that the screen reads: first those stored with the snapshot, then what the worker computes. What is
+ * typed shows at once; a formula keeps its last value until the engine has answered.
+ */
+export class SessionValues {
+  private readonly cache: ValueCache
+  /** Until the engine has given every value, an input that was not stored stands for itself. */
+  private complete = false
+
+  constructor(
+    private readonly workbook: Workbook,
+    stored: StoredValues | undefined,
+  ) {
+    this.cache = stored ? ValueCache.fromStored(stored) : new ValueCache()
+  }
+
+  value(address: CellAddress): CellValue {
+    const known = this.cache.get(address)
+    if (known !== null || this.complete) return known
+    return literal(cellAt(this.workbook, address)?.input)
+  }
+
+  named(name: string): CellValue[] | undefined {
+    const area = this.workbook.names.get(name)?.area
+    if (!area) return undefined
+    const { sheet } = area
+    return Array.from({ length: area.rowCount * area.columnCount }, (_, i) =>
+      this.value({
+        sheet,
+        row: area.row + Math.floor(i / area.columnCount),
+        column: area.column + (i % area.columnCount),
+      }),
+    )
+  }
+
+  /** What the worker computed. */
+  take(packed: PackedChanges, all: boolean): ValueChanges {
+    this.cache.applyPacked(packed)
+    if (all) this.complete = true
+    return changesOf(packed)
+  }
+
+  /** What was done to the workbook here, before the engine has followed. */
+  follow(operations: readonly Operation[], touched: readonly CellAddress[]): ValueChanges {
+    for (const operation of operations) this.cache.follow(operation)
+    for (const address of touched) {
+      const input = cellAt(this.workbook, address)?.input
+      if (!isFormula(input)) this.cache.set(address, literal(input))
+    }
+    return touchedChanges(touched)
+  }
+}
+
+/** The value of an input that is no formula; the mark that makes a text of it is not part of it. */
+function literal(input: CellInput | undefined): CellValue {
+  if (input === undefined) return null
+  if (typeof input !== 'string') return input
+  if (input.startsWith('=')) return null
+  return input.startsWith("'") ? input.slice(1) : input
+}
+
+function changesOf(packed: PackedChanges): ValueChanges {
+  const { address, sheets } = packed
+  return {
+    sheets,
+    visit: (sheet, visit) => {
+      const index = sheets.indexOf(sheet)
+      if (index < 0) return
+      for (let i = 0; i < address.length; i += 3) {
+        if (address[i] === index) visit(address[i + 1] ?? 0, address[i + 2] ?? 0)
+      }
+    },
+  }
+}
+
+function touchedChanges(touched: readonly CellAddress[]): ValueChanges {
+  return {
+    sheets: [...new Set(touched.map((cell) => cell.sheet))],
+    visit: (sheet, visit) => {
+      for (const cell of touched) if (cell.sheet === sheet) visit(cell.row, cell.column)
+    },
+  }
+}

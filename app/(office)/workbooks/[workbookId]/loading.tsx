@@ -1,0 +1,5 @@
+import { Opening } from './_editor/opening'
+
+export default function Loading() {
+  return <Opening />
+}
