@@ -1,3 +1,4 @@
+import { cookies } from 'next/headers'
 import NextAuth, { CredentialsSignin, type NextAuthConfig } from 'next-auth'
 import Credentials from 'next-auth/providers/credentials'
 import { signIn as openSession } from '@/db/access/members'
@@ -12,6 +13,9 @@ class Refused extends CredentialsSignin {
   }
 }
 
+/** The library keeps an address to return to in this; the sign-in form has its own, so it is taken away again. */
+const returnCookie = 'panewright-return'
+
 /**
  * The cookie is an encrypted token that holds the session row's token and nothing else. The library's own routes are
  * not mounted: signing in is a server action, so that token is never handed to a page's scripts.
@@ -24,6 +28,7 @@ const auth = NextAuth((): NextAuthConfig => {
     session: { strategy: 'jwt', maxAge: sessionSeconds },
     cookies: {
       sessionToken: { name, options: { httpOnly: true, sameSite: 'lax', path: '/', secure } },
+      callbackUrl: { name: returnCookie, options: { httpOnly: true, sameSite: 'lax', path: '/', secure } },
     },
     pages: { signIn: '/sign-in', error: '/sign-in' },
     providers: [
@@ -55,6 +60,7 @@ const auth = NextAuth((): NextAuthConfig => {
 export async function signInWith(email: string, password: string): Promise<Result<void>> {
   try {
     await auth.signIn('credentials', { email, password, redirect: false })
+    ;(await cookies()).delete(returnCookie)
     return succeed(undefined)
   } catch (error) {
     if (error instanceof Refused) return { ok: false, failure: error.failure }

@@ -18,13 +18,11 @@ export function PersonMenu({ name, role }: { readonly name: string; readonly rol
   useEffect(() => choose(currentTheme()), [])
 
   return (
-    <DropdownMenu.Root onOpenChange={(open) => open && choose(currentTheme())}>
-      <DropdownMenu.Trigger
-        aria-label={`${name}, ${role}: your menu`}
-        className="flex min-h-10 items-center gap-2 rounded-soft px-3 hover:bg-[color-mix(in_srgb,var(--ink)_7%,transparent)]"
-      >
+    <DropdownMenu.Root modal={false} onOpenChange={(open) => open && choose(currentTheme())}>
+      <DropdownMenu.Trigger className="flex min-h-10 items-center gap-2 rounded-soft px-3 hover:bg-[color-mix(in_srgb,var(--ink)_7%,transparent)]">
         <span className="max-w-40 truncate font-medium">{name}</span>
-        <span className="text-sm text-quiet max-sm:hidden">{role}</span>
+        <span className="text-sm text-quiet max-sm:sr-only">{role}</span>
+        <span className="sr-only">your menu</span>
         <ChevronDown size={16} aria-hidden="true" className="text-quiet" />
       </DropdownMenu.Trigger>
       <DropdownMenu.Portal>

@@ -39,6 +39,12 @@ export function keepValues(actor: Actor, workbookId: string): void {
   due.set(slot, { since, timer })
 }
 
+/** Lets go of everything that waits, as the server closes. */
+export function stopKeeping(): void {
+  for (const { timer } of due.values()) clearTimeout(timer)
+  due.clear()
+}
+
 /** Whether the values of the newest state were stored; no when it changed meanwhile, or cannot be computed. */
 export async function computeAndKeep(actor: Actor, workbookId: string): Promise<boolean> {
   const opened = await openWorkbook(actor, workbookId)

@@ -9,7 +9,6 @@ import {
   type Workbook,
 } from '../../../lib/workbook'
 import { createEngine } from '../../../lib/workbook/engine'
-import { writeXlsx } from '../../../lib/workbook/xlsx'
 import type { AnswerOf, Job, StoredState, TallyFigures } from './jobs'
 import { storedValues } from './unpack'
 
@@ -22,6 +21,8 @@ export async function perform(job: Job): Promise<AnswerOf<Job>> {
     if (job.kind === 'values') {
       return { values: storedValues(workbook, engine.all()), tally: tallyOf(workbook, engine) }
     }
+    // The file library is slow to load, and most jobs only compute.
+    const { writeXlsx } = await import('../../../lib/workbook/xlsx')
     const stream = createWriteStream(job.path, { mode: 0o600 })
     await writeXlsx(workbook, (address) => engine.value(address), stream, {
       title: job.title,

@@ -4,7 +4,7 @@ import { type RowAction, RowMenu } from './row-menu'
 
 /** Columns of the list from the width where they fit; below it a row is a small card. */
 export const columnsClass =
-  'lg:grid lg:grid-cols-[minmax(0,1fr)_8.5rem_9.5rem_9.5rem_10rem_2.5rem] lg:items-center lg:gap-x-6'
+  'lg:grid lg:grid-cols-[minmax(0,1fr)_7.5rem_9.5rem_9rem_7rem_2.5rem] lg:items-center lg:gap-x-5'
 
 export function ListRow({
   workbook,
@@ -23,11 +23,14 @@ export function ListRow({
         <Link
           href={`/workbooks/${workbook.id}`}
           data-row
-          className="block truncate font-semibold outline-none after:absolute after:inset-0 after:rounded-[3px] focus-visible:after:outline-2 focus-visible:after:-outline-offset-2 focus-visible:after:outline-clay"
+          prefetch={false}
+          className="line-clamp-2 font-semibold outline-none after:absolute after:inset-0 after:rounded-[3px] focus-visible:after:outline-2 focus-visible:after:-outline-offset-2 focus-visible:after:outline-clay"
         >
           {workbook.title}
         </Link>
-        <p className="text-sm text-quiet">{workbook.state}</p>
+        <p className="text-sm text-quiet">
+          {workbook.state} · made by {workbook.madeBy}
+        </p>
       </div>
       <dl className="mt-3 grid grid-cols-2 gap-x-6 gap-y-2 sm:grid-cols-3 lg:contents">
         {workbook.figures.map((figure) => (
@@ -50,11 +53,8 @@ export function ListRow({
         ))}
       </dl>
       <p className="mt-3 text-sm text-quiet lg:mt-0">
+        <span className="lg:sr-only">Changed </span>
         <time dateTime={workbook.changedAt}>{workbook.changed}</time>
-        <span className="lg:block lg:truncate">
-          <span className="lg:hidden">, </span>
-          made by {workbook.madeBy}
-        </span>
       </p>
       <div className="absolute top-3 right-2 z-10 lg:static">
         <RowMenu id={workbook.id} title={workbook.title} mayChange={mayChange} onChoose={onChoose} />

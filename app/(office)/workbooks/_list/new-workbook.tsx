@@ -7,22 +7,12 @@ import { Dialog } from '@/app/_ui/dialog'
 import { ask } from '@/app/_ui/request'
 import { TextField } from '@/app/_ui/text-field'
 import { type Choice, ChoiceCards } from './choice-cards'
-import { FrameOutline } from './frame-outline'
+import { FrameOutline, newFrames } from './frame-outline'
 
-const frames: readonly Choice[] = [
-  {
-    value: 'gable',
-    title: 'Gable',
-    detail: 'Straight walls, two slopes, a ridge',
-    picture: <FrameOutline frame="gable" />,
-  },
-  {
-    value: 'hoop',
-    title: 'Hoop',
-    detail: 'Bent bows, film or thin sheet',
-    picture: <FrameOutline frame="hoop" />,
-  },
-]
+const frames: readonly Choice[] = newFrames.map((frame) => ({
+  ...frame,
+  picture: <FrameOutline frame={frame.value} />,
+}))
 
 const systems: readonly Choice[] = [
   { value: 'us', title: 'US customary', detail: 'ft, in, °F, Btu/h' },

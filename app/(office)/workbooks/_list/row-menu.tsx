@@ -19,7 +19,7 @@ export function RowMenu({
   readonly onChoose: (action: RowAction) => void
 }) {
   return (
-    <DropdownMenu.Root>
+    <DropdownMenu.Root modal={false}>
       <DropdownMenu.Trigger
         aria-label={`More about ${title}`}
         className="grid size-10 place-items-center rounded-soft text-quiet hover:bg-[color-mix(in_srgb,var(--ink)_7%,transparent)] hover:text-ink"
