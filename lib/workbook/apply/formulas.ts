@@ -1,4 +1,5 @@
 import type { CellAddress } from '../contracts'
+import type { Shifted } from '../formula/rewrite'
 import { type Cell, isFormula, type Sheet, type Workbook } from '../model'
 import type { CellPatch, Operation } from '../operations'
 import { setCells } from './parts'
@@ -10,13 +11,12 @@ export interface Rewritten {
 }
 
 /**
- * Rewrites every formula of the workbook in place, before anything moves. `forward` gives the new text, `backward` what the
- * inverse change makes of that; addresses are those from before. `skip` leaves out cells that are about to be removed.
+ * Rewrites every formula of the workbook in place, before anything moves; addresses are those from before.
+ * `skip` leaves out cells that are about to be removed.
  */
 export function rewriteFormulas(
   workbook: Workbook,
-  forward: (text: string, sheet: Sheet) => string,
-  backward: (text: string, sheet: Sheet) => string,
+  change: (text: string, sheet: Sheet) => Shifted,
   skip: (sheet: Sheet, row: number, column: number) => boolean = () => false,
 ): Rewritten {
   const touched: CellAddress[] = []
@@ -24,10 +24,9 @@ export function rewriteFormulas(
   for (const sheet of workbook.sheets) {
     const patches: CellPatch[] = []
     eachFormula(sheet, (input, cell, row, column, cells) => {
-      const text = forward(input, sheet)
-      if (text === input && backward(text, sheet) === input) return
-      if (skip(sheet, row, column)) return
-      if (backward(text, sheet) !== input) patches.push({ row, column, input })
+      const { text, exact } = change(input, sheet)
+      if ((text === input && exact) || skip(sheet, row, column)) return
+      if (!exact) patches.push({ row, column, input })
       if (text === input) return
       cells[column] = { ...cell, input: text }
       touched.push({ sheet: sheet.id, row, column })

@@ -69,7 +69,6 @@ function change(workbook: Workbook, sheet: Sheet, axis: Axis, lines: LineChange)
   const rewritten = rewriteFormulas(
     workbook,
     (text, home) => shiftFormula(text, home.name, sheet.name, axis, lines),
-    (text, home) => shiftFormula(text, home.name, sheet.name, axis, back),
     (home, row, column) => home === sheet && gone(row, column),
   )
   const names = shiftNames(workbook, sheet, axis, lines, back)

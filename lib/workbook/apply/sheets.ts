@@ -33,11 +33,7 @@ export const applyAddSheet: Apply<'add-sheet'> = (workbook, operation) => {
 
 /** Formulas that already name a sheet which is not there: its removal would make `#REF!` of them. */
 function formulasThatName(workbook: Workbook, name: string): Operation[] {
-  return rewriteFormulas(
-    workbook,
-    (text) => text,
-    (text) => (mentionsSheet(text, name) ? '' : text),
-  ).restore
+  return rewriteFormulas(workbook, (text) => ({ text, exact: !mentionsSheet(text, name) })).restore
 }
 
 function newSheet(operation: OperationOf<'add-sheet'>): Sheet {
@@ -68,8 +64,10 @@ export const applyRemoveSheet: Apply<'remove-sheet'> = (workbook, operation) => 
   const at = workbook.sheets.indexOf(sheet)
   const rewritten = rewriteFormulas(
     workbook,
-    (text) => dropSheetInFormula(text, sheet.name),
-    (text) => text,
+    (text) => {
+      const dropped = dropSheetInFormula(text, sheet.name)
+      return { text: dropped, exact: dropped === text }
+    },
     (home) => home === sheet,
   )
   const lostNames: Operation[] = []
@@ -117,11 +115,10 @@ export const applyRenameSheet: Apply<'rename-sheet'> = (workbook, operation) => 
   if (taken) return taken
   const { name } = sheet
   if (name === operation.name) return succeed({ inverse: [], touched: [] })
-  const rewritten = rewriteFormulas(
-    workbook,
-    (text) => renameInFormula(text, name, operation.name),
-    (text) => renameInFormula(text, operation.name, name),
-  )
+  const rewritten = rewriteFormulas(workbook, (text) => {
+    const renamed = renameInFormula(text, name, operation.name)
+    return { text: renamed, exact: renameInFormula(renamed, operation.name, name) === text }
+  })
   sheet.name = operation.name
   return succeed({
     inverse: [{ kind: 'rename-sheet', sheet: sheet.id, name }, ...rewritten.restore],

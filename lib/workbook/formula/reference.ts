@@ -20,36 +20,28 @@ export interface Reference {
   readonly last: ReferenceEnd
 }
 
-interface Found<T> {
-  readonly value: T
-  readonly end: number
-}
+/** The end that `readEnd` read last: numbers kept outside, since a structural change reads very many. */
+const read = { row: 0, column: 0, rowFixed: false, columnFixed: false, end: 0 }
 
 /** The reference that begins at `at`, or undefined when what stands there is something else. */
 export function parseReference(text: string, at: number): Reference | undefined {
-  const prefix = parseSheetPrefix(text, at)
-  const from = prefix?.end ?? at
-  const first = parseEnd(text, from)
-  if (!first) return undefined
-  const second = parseSecond(text, first.end, prefix?.value, first.value)
-  const single = first.value.row >= 0 && first.value.column >= 0
-  if (!second) {
-    if (!single || isCall(text, first.end)) return undefined
-    return make(at, first.end, prefix?.value, 'cell', first.value, first.value)
+  const prefixEnd = endOfSheetPrefix(text, at)
+  if (!readEnd(text, prefixEnd)) return undefined
+  const first = taken()
+  const firstEnd = read.end
+  const sheet = prefixEnd === at ? undefined : sheetOfPrefix(text, at, prefixEnd)
+  const single = first.row >= 0 && first.column >= 0
+  if (!readSecond(text, firstEnd, sheet, first)) {
+    if (!single || isCall(text, firstEnd)) return undefined
+    return { start: at, end: firstEnd, sheet, shape: 'cell', first, last: first }
   }
-  const shape = single ? 'area' : first.value.row < 0 ? 'columns' : 'rows'
-  return make(at, second.end, prefix?.value, shape, first.value, second.value)
+  const shape = single ? 'area' : first.row < 0 ? 'columns' : 'rows'
+  return { start: at, end: read.end, sheet, shape, first, last: taken() }
 }
 
-function make(
-  start: number,
-  end: number,
-  sheet: string | undefined,
-  shape: Reference['shape'],
-  first: ReferenceEnd,
-  last: ReferenceEnd,
-): Reference {
-  return { start, end, sheet, shape, first, last }
+function taken(): ReferenceEnd {
+  const { row, column, rowFixed, columnFixed } = read
+  return { row, column, rowFixed, columnFixed }
 }
 
 function isCall(text: string, at: number): boolean {
@@ -58,10 +50,11 @@ function isCall(text: string, at: number): boolean {
   return text.charCodeAt(next) === 40
 }
 
-/** `Frame!` or `'Price list'!`. */
-export function parseSheetPrefix(text: string, at: number): Found<string> | undefined {
+/** Where `Frame!` or `'Price list'!` ends; `at` itself when no sheet is named there. */
+function endOfSheetPrefix(text: string, at: number): number {
+  let end = at
   if (text.charCodeAt(at) === 39) {
-    let end = at + 1
+    end += 1
     while (end < text.length) {
       if (text.charCodeAt(end) === 39) {
         if (text.charCodeAt(end + 1) !== 39) break
@@ -69,71 +62,68 @@ export function parseSheetPrefix(text: string, at: number): Found<string> | unde
       }
       end += 1
     }
-    if (text[end + 1] !== '!' || end === at + 1) return undefined
-    return { value: text.slice(at + 1, end).replaceAll("''", "'"), end: end + 2 }
+    return text.charCodeAt(end + 1) === 33 && end > at + 1 ? end + 2 : at
   }
-  let end = at
   while (isWordPart(text.charCodeAt(end))) end += 1
-  if (end === at || text[end] !== '!') return undefined
-  return { value: text.slice(at, end), end: end + 1 }
+  return text.charCodeAt(end) === 33 && end > at ? end + 1 : at
 }
 
-function parseEnd(text: string, at: number): Found<ReferenceEnd> | undefined {
+function sheetOfPrefix(text: string, at: number, end: number): string {
+  return text.charCodeAt(at) === 39
+    ? text.slice(at + 1, end - 2).replaceAll("''", "'")
+    : text.slice(at, end - 1)
+}
+
+/** Reads one end into `read`; false when there is none. */
+function readEnd(text: string, at: number): boolean {
   let next = at
-  let columnFixed = false
-  if (text.charCodeAt(next) === 36) {
-    columnFixed = true
-    next += 1
-  }
+  const marked = text.charCodeAt(next) === 36
+  if (marked) next += 1
   let column = 0
   const letters = next
   while (isLetter(text.charCodeAt(next))) {
-    if (next - letters === 3) return undefined
+    if (next - letters === 3) return false
     column = column * 26 + (text.charCodeAt(next) & 31)
     next += 1
   }
-  column -= 1
   const hasColumn = next > letters
-  let rowFixed = false
+  let rowFixed = marked && !hasColumn
   if (hasColumn && text.charCodeAt(next) === 36) {
     rowFixed = true
     next += 1
-  } else if (!hasColumn) {
-    rowFixed = columnFixed
-    columnFixed = false
   }
   let row = 0
   const digits = next
   while (isDigit(text.charCodeAt(next))) {
-    if (next - digits === 7) return undefined
+    if (next - digits === 7) return false
     row = row * 10 + text.charCodeAt(next) - 48
     next += 1
   }
   const hasRow = next > digits
-  if ((hasRow && row === 0) || (!hasRow && rowFixed) || (!hasRow && !hasColumn)) return undefined
+  if (hasRow ? row === 0 : rowFixed || !hasColumn) return false
   const after = text.charCodeAt(next)
-  if (isWordPart(after) || after === 46 || after === 36 || after === 33) return undefined
-  return { value: { row: hasRow ? row - 1 : -1, column, rowFixed, columnFixed }, end: next }
+  if (isWordPart(after) || after === 46 || after === 36 || after === 33) return false
+  read.row = hasRow ? row - 1 : -1
+  read.column = column - 1
+  read.rowFixed = rowFixed
+  read.columnFixed = marked && hasColumn
+  read.end = next
+  return true
 }
 
-/** The end after `:`, of the same shape; it may name the same sheet again. */
-function parseSecond(
-  text: string,
-  at: number,
-  sheet: string | undefined,
-  first: ReferenceEnd,
-): Found<ReferenceEnd> | undefined {
+/** Reads the end after `:`, of the same shape; it may name the same sheet again. */
+function readSecond(text: string, at: number, sheet: string | undefined, first: ReferenceEnd): boolean {
   let next = at
   while (isSpace(text.charCodeAt(next))) next += 1
-  if (text.charCodeAt(next) !== 58) return undefined
+  if (text.charCodeAt(next) !== 58) return false
   next += 1
   while (isSpace(text.charCodeAt(next))) next += 1
-  const prefix = parseSheetPrefix(text, next)
-  if (prefix && prefix.value.toLowerCase() !== sheet?.toLowerCase()) return undefined
-  const last = parseEnd(text, prefix?.end ?? next)
-  if (!last || isCall(text, last.end)) return undefined
-  const sameShape = last.value.row < 0 === first.row < 0 && last.value.column < 0 === first.column < 0
-  return sameShape ? last : undefined
+  const prefixEnd = endOfSheetPrefix(text, next)
+  if (prefixEnd !== next && sheetOfPrefix(text, next, prefixEnd).toLowerCase() !== sheet?.toLowerCase()) {
+    return false
+  }
+  if (!readEnd(text, prefixEnd) || isCall(text, read.end)) return false
+  return read.row < 0 === first.row < 0 && read.column < 0 === first.column < 0
 }
 
 /** An end as text: `B7`, `$B$7`, `B` of whole columns, `7` of whole rows. */

@@ -1,5 +1,5 @@
 import { quoteSheetName } from '../address'
-import { type LineChange, lineAfter, spanAfter } from './lines'
+import { type LineChange, lineAfter, type Span, spanAfter, undoneBy } from './lines'
 import { endText, type Reference, type ReferenceEnd } from './reference'
 import { scan } from './scan'
 
@@ -13,6 +13,12 @@ import { scan } from './scan'
  */
 export type Axis = 'row' | 'column'
 
+export interface Shifted {
+  readonly text: string
+  /** Whether the inverse change makes the old text of the new one, letter by letter. */
+  readonly exact: boolean
+}
+
 /** Rewrites the references to the sheet called `sheet`; `home` is the name of the sheet that the formula stands on. */
 export function shiftFormula(
   text: string,
@@ -20,14 +26,48 @@ export function shiftFormula(
   sheet: string,
   axis: Axis,
   change: LineChange,
-): string {
-  return rewrite(text, (reference) => {
-    if (!same(reference.sheet ?? home, sheet)) return undefined
-    return shiftReference(text, reference, axis, change)
+): Shifted {
+  const atHome = same(home, sheet)
+  if (!atHome && !text.includes('!')) return { text, exact: true }
+  const back = undoneBy(change)
+  let exact = true
+  const shifted = rewrite(text, (reference) => {
+    if (reference.sheet === undefined ? !atHome : !same(reference.sheet, sheet)) return undefined
+    const replacement = shiftReference(text, reference, axis, change)
+    exact &&= comesBack(text, reference, axis, change, back, replacement)
+    return replacement
   })
+  return { text: shifted, exact }
+}
+
+/** Whether undoing the change brings a reference back as typed (`a1`, `A01` and `A1 : B2` would not come back so). */
+function comesBack(
+  text: string,
+  { first, last, start, end, shape, sheet }: Reference,
+  axis: Axis,
+  change: LineChange,
+  back: LineChange,
+  replacement: string | undefined,
+): boolean {
+  const low = Math.min(first[axis], last[axis])
+  const high = Math.max(first[axis], last[axis])
+  if (low < 0) return true
+  const span = shape === 'cell' ? cellSpan(change, low) : spanAfter(change, [low, high])
+  const returned = span && (shape === 'cell' ? cellSpan(back, span[0]) : spanAfter(back, span))
+  if (returned?.[0] !== low || returned[1] !== high) return false
+  if (replacement === undefined) return true
+  const written = shape === 'cell' ? endText(first) : `${endText(first)}:${endText(last)}`
+  const typed = text.slice(start, end)
+  return sheet === undefined ? typed === written : typed.endsWith(`!${written}`)
+}
+
+function cellSpan(change: LineChange, line: number): Span | undefined {
+  const after = lineAfter(change, line)
+  return after === undefined ? undefined : [after, after]
 }
 
 export function renameInFormula(text: string, from: string, to: string): string {
+  if (!text.includes('!')) return text
   return rewrite(text, (reference) => {
     if (reference.sheet === undefined || !same(reference.sheet, from)) return undefined
     return write(to, reference.shape, reference.first, reference.last)
@@ -35,12 +75,14 @@ export function renameInFormula(text: string, from: string, to: string): string 
 }
 
 export function dropSheetInFormula(text: string, sheet: string): string {
+  if (!text.includes('!')) return text
   return rewrite(text, (reference) =>
     reference.sheet !== undefined && same(reference.sheet, sheet) ? '#REF!' : undefined,
   )
 }
 
 export function mentionsSheet(text: string, sheet: string): boolean {
+  if (!text.includes('!')) return false
   let found = false
   scan(text, (_kind, _start, _end, reference) => {
     if (reference?.sheet !== undefined && same(reference.sheet, sheet)) found = true

@@ -26,7 +26,7 @@ export function scan(text: string, visit: Visit): void {
   let at = text.charCodeAt(0) === 61 ? 1 : 0
   while (at < text.length) {
     const code = text.charCodeAt(at)
-    if (isWordStart(code) || code === 36 || code === 39 || isDigit(code)) {
+    if (mayBeReference(text, at, code)) {
       const reference = parseReference(text, at)
       if (reference) {
         visit('reference', at, reference.end, reference)
@@ -38,6 +38,19 @@ export function scan(text: string, visit: Visit): void {
     visit(kindOf(text, at, end, code), at, end)
     at = end
   }
+}
+
+/** Rules out function names, long names and plain numbers before anything is made of them. */
+function mayBeReference(text: string, at: number, code: number): boolean {
+  if (code === 36 || code === 39) return true
+  if (!isWordStart(code) && !isDigit(code)) return false
+  let end = at + 1
+  while (isWordPart(text.charCodeAt(end))) end += 1
+  const after = text.charCodeAt(end)
+  if (after === 33) return true
+  if (after === 40 || after === 46 || end - at > 10) return false
+  // Digits alone are whole rows only with a colon behind them.
+  return !isDigit(code) || after === 58 || isSpace(after)
 }
 
 function endOfToken(text: string, at: number, code: number): number {
