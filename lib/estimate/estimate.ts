@@ -110,8 +110,9 @@ function reportOf(workbook: Workbook, read: Read, engine: Engine): EstimateRepor
   return { unit_system: workbook.system, values, warnings }
 }
 
-/** A line's unit stands beside it, as text or formula; a column's is its kind's. */
+/** A line's unit stands beside it, as text or formula; a column's is its kind's. The unit of a ratio is 1. */
 function unitText(named: NamedValue, system: UnitSystem, currency: string, engine: Engine): string {
+  if (named.quantity === 'ratio') return '1'
   if (!lineNames.has(named.name)) return unitOf(named.quantity, system, currency).symbol
   const { sheet, row, column } = named.area
   const unit = engine.value({ sheet, row, column: column + 1 })
