@@ -1,0 +1,69 @@
+import { join } from 'node:path'
+import type { BrowserContext, Page } from 'playwright-core'
+import { projectRoot } from './empty-app'
+
+/** What `page-probe.js` keeps on the window. */
+interface Probe {
+  painted(number: number, within: number): Promise<Painted>
+  firstPainted(number: number, within: number): number | undefined
+  watchGaps(): void
+  stopGaps(): Gaps
+  workerAt(): number
+  frames(milliseconds: number): Promise<number[]>
+}
+
+/** Milliseconds since the page began, and since Enter was last pressed. */
+export interface Painted {
+  readonly at: number
+  readonly sinceEnter: number
+}
+
+/** The longest that the main thread gave nobody a turn, and the longest of its tasks above 50 ms (else 0). */
+export interface Gaps {
+  readonly gap: number
+  readonly task: number
+}
+
+type Probed = { readonly probe: Probe }
+
+export async function addProbe(context: BrowserContext): Promise<void> {
+  await context.addInitScript({ path: join(projectRoot, 'tests/bench/page-probe.js') })
+}
+
+/** Begins to wait for a number to be painted; ask before the act that brings it. */
+export function painted(page: Page, number: number, within: number): Promise<Painted> {
+  return page.evaluate(
+    ({ number, within }) => (globalThis as never as Probed).probe.painted(number, within),
+    { number, within },
+  )
+}
+
+/** When a number first stood on the screen, in milliseconds since the page was asked for. */
+export async function firstPainted(page: Page, number: number, within: number): Promise<number> {
+  const handle = await page.waitForFunction(
+    ({ number, within }) => (globalThis as never as Probed).probe.firstPainted(number, within),
+    { number, within },
+    { timeout: 60_000, polling: 100 },
+  )
+  return (await handle.jsonValue()) as number
+}
+
+export function watchGaps(page: Page): Promise<void> {
+  return page.evaluate(() => (globalThis as never as Probed).probe.watchGaps())
+}
+
+export function stopGaps(page: Page): Promise<Gaps> {
+  return page.evaluate(() => (globalThis as never as Probed).probe.stopGaps())
+}
+
+/** When the page last made a worker, in its own milliseconds. */
+export function workerAt(page: Page): Promise<number> {
+  return page.evaluate(() => (globalThis as never as Probed).probe.workerAt())
+}
+
+export function frames(page: Page, milliseconds: number): Promise<number[]> {
+  return page.evaluate(
+    (milliseconds) => (globalThis as never as Probed).probe.frames(milliseconds),
+    milliseconds,
+  )
+}
