@@ -28,8 +28,10 @@ export function connect(
     application_name: 'panewright',
     ...(options.role ? { options: `-c role=${options.role}` } : {}),
   })
-  // Without a listener, a connection that the server ends while idle would end this process.
+  // Without listeners, a connection that the server ends would end this process: the pool's is for idle ones, each
+  // connection's own for when it is in use (its next query fails anyway).
   pool.on('error', () => {})
+  pool.on('connect', (client) => client.on('error', () => {}))
   return new Kysely<DB>({ dialect: new PostgresDialect({ pool }) })
 }
 

@@ -4,7 +4,9 @@ import {
   chownSync,
   existsSync,
   mkdirSync,
+  readdirSync,
   readFileSync,
+  readlinkSync,
   renameSync,
   rmSync,
   writeFileSync,
@@ -65,8 +67,9 @@ export async function startCluster({ folder }, port) {
   if (running !== undefined && (await answers(running)) && (await isRunning(folder))) {
     return { port: running, started: false }
   }
-  // After a hard kill the old process number lingers until the system reaps it: try for five seconds.
+  // After a hard kill the server's children take a moment to end: try for ten seconds.
   for (let attempt = 1; ; attempt += 1) {
+    clearUnreaped(folder)
     const chosen = await freePort(port)
     const log = join(folder, 'server.log')
     const status = await runQuietly('pg_ctl', [
@@ -82,9 +85,28 @@ export async function startCluster({ folder }, port) {
       '30',
     ])
     if (status === 0 && (await answers(chosen))) return { port: chosen, started: true }
-    if (attempt === 10) throw new Obstacle(`PostgreSQL did not start. Its log: ${log}`)
-    await sleep(500)
+    if (attempt === 40) throw new Obstacle(`PostgreSQL did not start. Its log: ${log}`)
+    await sleep(250)
   }
+}
+
+/**
+ * A killed server keeps its process number until the system's first process reaps it, which some never do, and
+ * PostgreSQL takes that for a running one. Its pid file is removed once no process works in the data directory.
+ */
+function clearUnreaped(/** @type {string} */ folder) {
+  const pid = serverProcess(folder)
+  if (pid === undefined || !existsSync(`/proc/${pid}/stat`)) return
+  const stat = readFileSync(`/proc/${pid}/stat`, 'utf8')
+  if (stat[stat.lastIndexOf(')') + 2] !== 'Z') return
+  for (const name of readdirSync('/proc').filter((entry) => /^\d+$/.test(entry))) {
+    try {
+      if (readlinkSync(`/proc/${name}/cwd`) === folder) return
+    } catch {
+      // It ended meanwhile, or it is not ours to look at: then it is no child of this server either.
+    }
+  }
+  rmSync(join(folder, 'postmaster.pid'), { force: true })
 }
 
 /** Stops the server; open sessions are ended. Nothing to do when none runs. */
