@@ -2,6 +2,13 @@ export * from './address'
 export { applyAll, applyOperation } from './apply/apply-operation'
 export { refusedName } from './apply/names'
 export * from './contracts'
+export {
+  createEngineClient,
+  type EngineClient,
+  type EngineClientOptions,
+  type EngineClientStatus,
+} from './engine/client'
+export type { ClientPort, EngineReply, EngineRequest, ServerPort, TriedValues } from './engine/protocol'
 export * from './entry'
 export * from './formula/bounds'
 export * from './formula/scan'

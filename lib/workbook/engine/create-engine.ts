@@ -230,7 +230,9 @@ class WorkbookEngine implements Engine {
     } catch (cause) {
       this.onRebuild(cause)
       this.rebuild([])
-      return this.grid ? this.grid.formulas.getCellValue(at) : withoutEngine(cellAt(this.workbook, address)?.input)
+      return this.grid
+        ? this.grid.formulas.getCellValue(at)
+        : withoutEngine(cellAt(this.workbook, address)?.input)
     }
   }
 

@@ -1,1 +1,2 @@
 export { createEngine, type EngineOptions } from './create-engine'
+export { serveEngine } from './serve'

@@ -5,6 +5,10 @@ import { transform } from './transform'
 
 export interface Rebased {
   readonly operations: Operation[]
+  /** The same, one list for each of `pending`: an operation may become several, or none. */
+  readonly each: Operation[][]
+  /** `over` as it reads on top of `pending`. */
+  readonly over: Operation[]
   /** Those of `pending`, as given, of which nothing or not all is left: their ground is gone. */
   readonly dropped: Operation[]
 }
@@ -19,18 +23,18 @@ export function rebase(
   pending: readonly Operation[],
   over: readonly Operation[],
 ): Rebased {
-  const operations: Operation[] = []
+  const each: Operation[][] = []
   const dropped: Operation[] = []
   let others: readonly Operation[] = over
   let ground: readonly SheetGround[] = sheets.map(({ id, name }) => ({ id, name }))
   for (const operation of pending) {
     const [moved, followed] = cross([operation], others, ground)
     if (lostPart(operation, moved)) dropped.push(operation)
-    operations.push(...moved)
+    each.push(moved)
     others = followed
     ground = groundAfter(ground, operation)
   }
-  return { operations, dropped }
+  return { operations: each.flat(), each, over: [...others], dropped }
 }
 
 /**
@@ -42,20 +46,39 @@ function cross(
   theirs: readonly Operation[],
   ground: readonly SheetGround[],
 ): [Operation[], Operation[]] {
-  const [a] = mine
-  const [b] = theirs
-  if (a === undefined || b === undefined) return [[...mine], [...theirs]]
-  if (mine.length === 1 && theirs.length === 1) {
-    return [transform(a, b, ground, 'second'), transform(b, a, ground, 'first')]
+  const moved: Operation[] = []
+  let others: Operation[] = [...theirs]
+  let sheets = ground
+  for (const operation of mine) {
+    const [after, followed] = crossOne(operation, others, sheets)
+    for (const each of after) moved.push(each)
+    others = followed
+    sheets = groundAfter(sheets, operation)
   }
-  if (mine.length > 1) {
-    const [firstMoved, theirsAfter] = cross([a], theirs, ground)
-    const [restMoved, theirsEnd] = cross(mine.slice(1), theirsAfter, groundAfter(ground, a))
-    return [[...firstMoved, ...restMoved], theirsEnd]
+  return [moved, others]
+}
+
+function crossOne(
+  operation: Operation,
+  theirs: readonly Operation[],
+  ground: readonly SheetGround[],
+): [Operation[], Operation[]] {
+  let moved: Operation[] = [operation]
+  const followed: Operation[] = []
+  let sheets = ground
+  for (const other of theirs) {
+    const [only] = moved
+    if (moved.length === 1 && only) {
+      for (const each of transform(other, only, sheets, 'first')) followed.push(each)
+      moved = transform(only, other, sheets, 'second')
+    } else {
+      const [after, others] = cross(moved, [other], sheets)
+      for (const each of others) followed.push(each)
+      moved = after
+    }
+    sheets = groundAfter(sheets, other)
   }
-  const [moved, firstAfter] = cross([a], [b], ground)
-  const [mineEnd, restAfter] = cross(moved, theirs.slice(1), groundAfter(ground, b))
-  return [mineEnd, [...firstAfter, ...restAfter]]
+  return [moved, followed]
 }
 
 function lostPart(operation: Operation, moved: readonly Operation[]): boolean {
