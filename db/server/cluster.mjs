@@ -51,6 +51,8 @@ export async function initCluster({ folder, durable = true }, password) {
     rmSync(passwordFile, { force: true })
   }
   const settings = ["listen_addresses = '127.0.0.1'", "unix_socket_directories = ''", 'max_connections = 60']
+  // Recovery first writes the data directory out: in one call rather than a thousand files one by one (seconds).
+  if (process.platform === 'linux') settings.push('recovery_init_sync_method = syncfs')
   if (!durable) settings.push('fsync = off', 'synchronous_commit = off', 'full_page_writes = off')
   appendFileSync(join(making, 'postgresql.conf'), `\n${settings.join('\n')}\n`)
   renameSync(making, folder)
