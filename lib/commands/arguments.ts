@@ -33,6 +33,7 @@ export function optionsOf(
 }
 
 interface RankableOption extends ArgumentOption {
+  readonly weight: number
   readonly id: string
   readonly also: readonly string[]
 }
@@ -40,8 +41,10 @@ interface RankableOption extends ArgumentOption {
 /** The options that fit what was typed, best first; all of them, in their own order, when nothing was. */
 export function rankOptions(options: readonly ArgumentOption[], text: string, limit = 60) {
   if (text.trim() === '') return options.slice(0, limit)
-  const rankable: RankableOption[] = options.map((option) => ({
+  const rankable: RankableOption[] = options.map((option, index) => ({
     ...option,
+    // Equal matches stay in the order that the table has.
+    weight: -index / 1000,
     id: option.value,
     also: [option.value, ...(option.synonyms ?? []), ...(option.detail ? [option.detail] : [])],
   }))
