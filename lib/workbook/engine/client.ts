@@ -99,9 +99,9 @@ class WatchedEngine implements EngineClient {
 
   close(): void {
     this.closed = true
-    this.end()
     this.rejectTryOuts('The workbook was closed.')
     this.waiting = []
+    this.end()
   }
 
   private add(task: Task): void {

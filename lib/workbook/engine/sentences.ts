@@ -2,6 +2,7 @@ import type { DetailedCellError } from 'hyperformula'
 import type { CellAddress } from '../contracts'
 import { formulaBounds } from '../formula/bounds'
 import { scan } from '../formula/scan'
+import { limits } from '../limits'
 import { cellAt, sheetByName } from '../lookup'
 import { type CellError, isFormula, type Workbook } from '../model'
 
@@ -76,11 +77,28 @@ function nameAtFault(workbook: Workbook, input: unknown, code: string, message: 
   if (called !== undefined) return `There is no function called ${called}.`
   const named = /^Named expression (.+) not recognized\.$/.exec(message)?.[1]
   if (named !== undefined) return `There is no named value called ${named}.`
+  if (code === '#NAME?' && typeof input === 'string') {
+    const far = farReferenceIn(input)
+    if (far !== undefined) {
+      return `${far} lies outside a sheet, which has at most ${limits.rows} rows and ${limits.columns} columns.`
+    }
+  }
   if (code === '#REF!' && typeof input === 'string') {
     const sheet = unknownSheetIn(workbook, input)
     if (sheet !== undefined) return `There is no sheet called ${sheet}.`
   }
   return undefined
+}
+
+function farReferenceIn(formula: string): string | undefined {
+  let far: string | undefined
+  scan(formula, (_kind, start, end, reference) => {
+    if (!reference) return
+    const row = Math.max(reference.first.row, reference.last.row)
+    const column = Math.max(reference.first.column, reference.last.column)
+    if (row >= limits.rows || column >= limits.columns) far ??= formula.slice(start, end)
+  })
+  return far
 }
 
 function unknownSheetIn(workbook: Workbook, formula: string): string | undefined {
