@@ -1,6 +1,7 @@
-import { type LocalWorkbook, rebasePending } from './local-workbook'
+import type { LocalWorkbook } from './local-workbook'
 import type { Server } from './post-operations'
 import type { Claim, OperationQueue, QueuedOperation } from './queue'
+import { rebasePending } from './rebase-pending'
 import type { Sync } from './sync'
 
 /**
@@ -39,6 +40,14 @@ async function broughtForward(
   if (claim.base > local.base) return undefined
   const missing = await server.missing(claim.base)
   if (!missing || missing.seq < local.base) return undefined
-  const upToHere = missing.operations.filter((operation) => operation.seq <= local.base)
-  return rebasePending(fresh, upToHere).pending
+  const ids = new Set(missing.operations.map((operation) => operation.id))
+  const unknown = fresh.filter((operation) => !ids.has(operation.id))
+  const mine = new Set(claim.operations.map((operation) => operation.id))
+  const others = missing.operations.filter(({ id, seq }) => seq <= local.base && !mine.has(id))
+  return rebasePending(
+    local.acknowledgedSheets(),
+    unknown,
+    others.map(({ op }) => op),
+    () => crypto.randomUUID(),
+  ).pending
 }

@@ -5,10 +5,11 @@ import {
   type CellAddress,
   type LoggedOperation,
   type Operation,
+  type SheetGround,
   type Workbook,
 } from '@/lib/workbook'
 import type { QueuedOperation } from './queue'
-import { rebaseList } from './rebase-list'
+import { rebasePending } from './rebase-pending'
 import { UndoStack } from './undo'
 
 /** One of one's own operations that the server has not acknowledged, as it was applied here. */
@@ -100,59 +101,68 @@ export class LocalWorkbook {
    * them found their ground gone.
    */
   integrate(missing: readonly LoggedOperation[], seq: number): QueuedOperation[] {
-    const known = new Set(missing.map((operation) => operation.id))
     const mine = new Set(this.pending.map((operation) => operation.id))
-    const foreign = missing.filter((operation) => !mine.has(operation.id))
-    const plan = rebasePending(this.pending, missing)
-    for (const other of foreignOnTop(this.pending, missing)) {
-      this.done.follow(other)
-      this.undone.follow(other)
-    }
+    // The log took one's own on the ground they were made on, so they stand before all that is foreign.
+    const known = missing.filter((operation) => mine.has(operation.id))
+    const foreign = missing.filter((operation) => !mine.has(operation.id)).map(({ op }) => op)
     if (foreign.length === 0) {
-      this.acknowledge(seq, known)
+      this.acknowledge(seq, new Set(known.map((operation) => operation.id)))
       return []
     }
+    const knownIds = new Set(known.map((operation) => operation.id))
+    const sheets = this.workbook.sheets.map(({ id, name }) => ({ id, name }))
     const follow = new Follower(this.workbook)
     for (const inverse of inverseOf(this.pending)) follow.must(inverse)
-    for (const operation of missing) follow.must(operation.op)
+    for (const operation of known) follow.must(operation.op)
+    const rest = this.pending.filter((operation) => !knownIds.has(operation.id))
+    const rebased = rebasePending(this.workbook.sheets, rest, foreign, this.newId)
+    this.stepsFollow(sheets, rest, rebased.over)
+    for (const op of foreign) follow.must(op)
     this.pending = []
-    const lost = [...plan.lost]
-    for (const operation of plan.pending) this.reapply(operation, follow, lost)
+    const lost = [...rebased.lost]
+    for (const operation of rebased.pending) this.reapply(operation, follow, lost)
     this.refreshSteps()
     this.base = seq
     this.onFollow(follow.followed())
     return lost
   }
 
-  /** Operations that another tab of the same person left behind, already rebased to `base`. */
+  /** Operations that another tab of the same person left behind, made on the workbook as the server has it at `base`. */
   adopt(operations: readonly QueuedOperation[]): QueuedOperation[] {
     const follow = new Follower(this.workbook)
-    const { pending: moved, lost } = rebasePending(operations, this.pending)
-    for (const operation of moved) {
-      this.reapply(operation, follow, lost)
-      this.done.follow(operation.op)
-      this.undone.follow(operation.op)
-    }
+    const sheets = this.acknowledgedSheets()
+    const over = this.pending.map(({ op }) => op)
+    const rebased = rebasePending(sheets, operations, over, this.newId)
+    const lost = [...rebased.lost]
+    for (const operation of rebased.pending) this.reapply(operation, follow, lost)
     this.onFollow(follow.followed())
     return lost
+  }
+
+  /** The sheets as they are without the pending operations. */
+  acknowledgedSheets(): SheetGround[] {
+    if (this.pending.length === 0) return this.workbook.sheets
+    const inverse = inverseOf(this.pending)
+    for (const operation of inverse) this.must(operation)
+    const sheets = this.workbook.sheets.map(({ id, name }) => ({ id, name }))
+    for (const { op } of this.pending) this.must(op)
+    return sheets
   }
 
   /** The server refused this batch: it is taken out from under the pending operations that follow it. */
   takeBack(batch: string): { label: string; lost: QueuedOperation[] } {
     const at = this.pending.findIndex((operation) => operation.batch === batch)
     const refused = this.pending.filter((operation) => operation.batch === batch)
-    const after = this.pending.slice(at).filter((operation) => operation.batch !== batch)
+    if (at < 0) return { label: '', lost: [] }
+    const after = this.pending.slice(at + refused.length)
     const gone = inverseOf(refused)
     const follow = new Follower(this.workbook)
     for (const inverse of inverseOf(after)) follow.must(inverse)
+    const rebased = rebasePending(this.workbook.sheets, after, gone, this.newId)
     for (const inverse of gone) follow.must(inverse)
-    this.pending = this.pending.slice(0, Math.max(0, at))
-    const lost: QueuedOperation[] = []
-    for (const operation of after) {
-      const [moved] = rebaseList([operation.op], gone)
-      if (moved) this.reapply({ ...operation, op: moved }, follow, lost)
-      else lost.push(operation)
-    }
+    this.pending = this.pending.slice(0, at)
+    const lost = [...rebased.lost]
+    for (const operation of rebased.pending) this.reapply(operation, follow, lost)
     this.done.remove(batch)
     this.undone.clear()
     this.refreshSteps()
@@ -168,6 +178,17 @@ export class LocalWorkbook {
     }
     const { id, batch, label, op } = operation
     this.pending.push({ id, batch, label, op, inverse: applied.value.inverse })
+  }
+
+  /** Somebody else's operations, as they read on top of the pending ones, pass under the steps of undo. */
+  private stepsFollow(
+    sheets: readonly SheetGround[],
+    rest: readonly QueuedOperation[],
+    over: readonly Operation[],
+  ): void {
+    const pending = new Set(rest.map((operation) => operation.batch))
+    this.done.follow(sheets, over, pending)
+    this.undone.follow(sheets, over, pending)
   }
 
   private refreshSteps(): void {
@@ -222,56 +243,4 @@ const batchOf = (operations: readonly PendingOperation[]) => operations[0]?.batc
 
 function inverseOf(operations: readonly { readonly inverse: readonly Operation[] }[]): Operation[] {
   return [...operations].reverse().flatMap((operation) => [...operation.inverse])
-}
-
-/**
- * Walks the log along the pending operations: one's own leaves the list when the log reaches it, somebody
- * else's pushes the rest along. An operation whose ground is gone is lost.
- */
-export function rebasePending(
-  pending: readonly QueuedOperation[],
-  missing: readonly { readonly id: string; readonly op: Operation }[],
-): { pending: QueuedOperation[]; lost: QueuedOperation[] } {
-  let rest: QueuedOperation[] = pending.map(({ id, batch, label, op }) => ({ id, batch, label, op }))
-  const lost: QueuedOperation[] = []
-  for (const logged of missing) {
-    if (rest.some((operation) => operation.id === logged.id)) {
-      rest = rest.filter((operation) => operation.id !== logged.id)
-      continue
-    }
-    let others: readonly Operation[] = [logged.op]
-    const next: QueuedOperation[] = []
-    for (const operation of rest) {
-      const moved = rebaseList([operation.op], others)
-      others = rebaseList(others, [operation.op])
-      const [op] = moved
-      if (op) next.push({ ...operation, op })
-      else lost.push(operation)
-    }
-    rest = next
-  }
-  return { pending: rest, lost }
-}
-
-/** The foreign ones among the missing, as they look from on top of the pending operations. */
-function foreignOnTop(
-  pending: readonly QueuedOperation[],
-  missing: readonly LoggedOperation[],
-): readonly Operation[] {
-  let rest = pending.map((operation) => ({ id: operation.id, op: operation.op }))
-  const seen: Operation[] = []
-  for (const logged of missing) {
-    if (rest.some((operation) => operation.id === logged.id)) {
-      rest = rest.filter((operation) => operation.id !== logged.id)
-      continue
-    }
-    let others: readonly Operation[] = [logged.op]
-    for (const operation of rest) others = rebaseList(others, [operation.op])
-    seen.push(...others)
-    rest = rest.flatMap((operation) => {
-      const [op] = rebaseList([operation.op], [logged.op])
-      return op ? [{ id: operation.id, op }] : []
-    })
-  }
-  return seen
 }

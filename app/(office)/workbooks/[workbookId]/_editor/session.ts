@@ -55,8 +55,10 @@ export class Session implements WorkbookSession {
     const workbook = fromJson(opened.snapshot.workbook)
     this.values = new SessionValues(workbook, opened.snapshot.values)
     this.engine = new EngineLink({
-      changes: (packed, all) => this.tell(this.values.take(packed, all)),
+      workbook: () => toJson(this.workbook),
+      changes: (packed, all, ahead) => this.tell(this.values.take(packed, all, ahead)),
       status: () => this.changed(),
+      stopped: (text) => this.announce({ kind: 'refused', text }),
     })
     this.local = new LocalWorkbook(workbook, opened.snapshot.seq, () => crypto.randomUUID(), this.follow)
     this.current = this.read(0)
@@ -91,7 +93,7 @@ export class Session implements WorkbookSession {
 
   /** Makes the worker; called once the first values are on the screen. */
   startEngine(): void {
-    if (!this.closed) this.engine.start(toJson(this.workbook))
+    if (!this.closed) this.engine.start()
   }
 
   snapshot(): SessionSnapshot {

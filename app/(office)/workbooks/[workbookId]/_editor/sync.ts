@@ -87,7 +87,8 @@ export class Sync {
     this.disk = this.disk.then(() => write(queue)).catch(() => undefined)
   }
 
-  private async send(): Promise<void> {
+  /** Sends what is pending, unless that is under way or to be tried later. */
+  async send(): Promise<void> {
     if (this.sending || this.closed || this.timer) return
     this.sending = true
     try {

@@ -1,5 +1,4 @@
-import type { CellAddress, Operation } from '@/lib/workbook'
-import { rebaseList } from './rebase-list'
+import { type CellAddress, type Operation, rebase, type SheetGround } from '@/lib/workbook'
 
 /** One action of one's own: what takes it back, and where it was. */
 export interface UndoStep {
@@ -49,25 +48,48 @@ export class UndoStack {
   }
 
   /**
-   * Somebody else's `operation` was applied to the workbook as it is now. Every inverse moves along with it,
-   * and gives up the cells that the other has written since: undo never takes back what somebody else did.
+   * Somebody else's operations were applied to the workbook as it is now, whose sheets are `sheets`. Every inverse
+   * moves along with them, and gives up the cells that the other has written since: undo never takes back what
+   * somebody else did. Batches in `pending` are applied anew and get new inverses instead.
    */
-  follow(operation: Operation): void {
-    let others: readonly Operation[] = [operation]
+  follow(
+    sheets: readonly SheetGround[],
+    operations: readonly Operation[],
+    pending: ReadonlySet<string> = new Set(),
+  ): void {
+    let others = operations
     for (let i = this.steps.length - 1; i >= 0 && others.length > 0; i -= 1) {
       const step = this.steps[i]
       if (!step) continue
-      const moved = rebaseList(step.inverse, others)
-      const kept = moved.flatMap((inverse) => without(inverse, others))
-      others = rebaseList(others, step.inverse)
-      this.steps[i] = {
-        ...step,
-        inverse: kept,
-        place: step.place && followPlace(step.place, operation),
-        blocked: kept.length === 0 && step.inverse.length > 0 ? true : (step.blocked ?? false),
+      const place = step.place && operations.reduce(followPlace, step.place)
+      const inverse: Operation[] = []
+      for (const operation of step.inverse) {
+        inverse.push(...passUnder(sheets, operation, others))
+        others = rebase(sheets, [operation], others).over
       }
+      const blocked = inverse.length === 0 && !pending.has(step.batch)
+      this.steps[i] = { ...step, inverse, place, blocked }
     }
   }
+}
+
+/** One operation of an inverse after the others, one at a time, without what they wrote. */
+function passUnder(
+  sheets: readonly SheetGround[],
+  operation: Operation,
+  others: readonly Operation[],
+): readonly Operation[] {
+  let pieces: readonly Operation[] = [operation]
+  for (const other of others) {
+    let here: readonly Operation[] = [other]
+    const moved: Operation[] = []
+    for (const piece of pieces) {
+      for (const kept of without(piece, here)) moved.push(...rebase(sheets, [kept], here).operations)
+      here = rebase(sheets, [piece], here).over
+    }
+    pieces = moved
+  }
+  return pieces
 }
 
 /** A set of cells less those that `others` wrote too. */

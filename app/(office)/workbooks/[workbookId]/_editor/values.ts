@@ -47,11 +47,36 @@ export class SessionValues {
     )
   }
 
-  /** What the worker computed. */
-  take(packed: PackedChanges, all: boolean): ValueChanges {
-    this.cache.applyPacked(packed)
+  /**
+   * What the worker computed. Where the workbook here is some operations ahead of the worker, the values move along
+   * with those, and what was typed since stays.
+   */
+  take(packed: PackedChanges, all: boolean, ahead: readonly Operation[]): ValueChanges {
     if (all) this.complete = true
-    return changesOf(packed)
+    if (ahead.length === 0) {
+      this.cache.applyPacked(packed)
+      return changesOf(packed)
+    }
+    const computed = new ValueCache()
+    computed.applyPacked(packed)
+    for (const operation of ahead) computed.follow(operation)
+    const changed: CellAddress[] = []
+    computed.each((address, value) => {
+      if (this.isTypedIn(ahead, address)) return
+      this.cache.set(address, value)
+      changed.push(address)
+    })
+    return touchedChanges(changed)
+  }
+
+  /** A value typed since stands until the worker has it; addresses of earlier lines may differ, which costs a moment's delay. */
+  private isTypedIn(ahead: readonly Operation[], { sheet, row, column }: CellAddress): boolean {
+    return ahead.some(
+      (operation) =>
+        operation.kind === 'set-cells' &&
+        operation.sheet === sheet &&
+        operation.cells.some((cell) => cell.row === row && cell.column === column),
+    )
   }
 
   /** What was done to the workbook here, before the engine has followed. */

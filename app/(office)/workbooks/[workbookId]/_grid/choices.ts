@@ -26,3 +26,14 @@ const yesAndNo: readonly Choice[] = [
   { value: 'yes', title: 'yes' },
   { value: 'no', title: 'no' },
 ]
+
+/** The same as plain values, for reading what was typed; yes and no are read as a quantity of their own. */
+export function listedChoices(
+  session: WorkbookSession,
+  sheet: Sheet,
+  row: number,
+  column: number,
+): readonly string[] | undefined {
+  if (formatOf(sheet, sheet.rows[row]?.[column], column).choices === undefined) return undefined
+  return cellChoices(session, sheet, row, column)?.map(({ value }) => value)
+}

@@ -3,6 +3,7 @@ import { lockWords } from '../_editor/permission-words'
 import type { WorkbookSession } from '../_editor/session-contract'
 import { type EditorView, extentOf } from '../_editor/view-state'
 import { currencyOf } from '../_tally/figures'
+import { listedChoices } from './choices'
 import { clearOperation, pasteOperations, writeOperations } from './clipboard'
 import { type EntryContext, openingText, readEntry } from './entry'
 import { moved, type Rectangle, rectangle } from './selection'
@@ -23,7 +24,12 @@ export class Editing {
   }
 
   context(sheet: Sheet): EntryContext {
-    return { sheet, system: this.session.workbook.system, currency: currencyOf(this.session.named) }
+    return {
+      sheet,
+      system: this.session.workbook.system,
+      currency: currencyOf(this.session.named),
+      choices: (row, column) => listedChoices(this.session, sheet, row, column),
+    }
   }
 
   /** Opens the active cell: with its own text, or with what was typed over it. False, and why is said, when it is locked. */

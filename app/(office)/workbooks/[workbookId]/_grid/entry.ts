@@ -16,6 +16,8 @@ export interface EntryContext {
   readonly sheet: Sheet
   readonly system: UnitSystem
   readonly currency: string | undefined
+  /** The values that a cell takes, when it takes only certain ones. */
+  readonly choices?: (row: number, column: number) => readonly string[] | undefined
 }
 
 /** What the editor opens with: the formula, or the number in a form that reads back to exactly itself. */
@@ -33,7 +35,13 @@ export function readEntry(
 ): Result<CellPatch> {
   const cell = context.sheet.rows[row]?.[column]
   if (text.trim() === '') return succeed(clearPatch(row, column))
-  const read = parseEntry(text, formatOf(context.sheet, cell, column), context.system, context.currency)
+  const read = parseEntry(
+    text,
+    formatOf(context.sheet, cell, column),
+    context.system,
+    context.currency,
+    context.choices?.(row, column),
+  )
   if (!read.ok) return fail(read.failure.code, `${cellName(row, column)}: ${lowerFirst(read.failure.text)}`)
   const input = read.value
   if (input === null || input === undefined) return succeed(clearPatch(row, column))
