@@ -1,7 +1,7 @@
-import { spawnSync } from 'node:child_process'
 import { createHash } from 'node:crypto'
 import { existsSync, readdirSync, readFileSync, writeFileSync } from 'node:fs'
 import { join } from 'node:path'
+import { runChild } from './children.mjs'
 import { withLock } from './lock.mjs'
 import { ensureDataFolder, Obstacle, root, say } from './project.mjs'
 import { ensureSecrets } from './secrets.mjs'
@@ -44,15 +44,10 @@ export async function ensureBuilt() {
     const built = existsSync(join(root, '.next/BUILD_ID')) && existsSync(stamp)
     if (built && readFileSync(stamp, 'utf8') === sources) return
     say('Building …')
-    const { status } = spawnSync(process.execPath, [nextProgram(), 'build'], {
-      cwd: root,
-      stdio: ['ignore', 2, 2],
-      env: {
-        ...process.env,
-        NODE_ENV: 'production',
-        NEXT_TELEMETRY_DISABLED: '1',
-        NEXT_SERVER_ACTIONS_ENCRYPTION_KEY: ensureSecrets().NEXT_SERVER_ACTIONS_ENCRYPTION_KEY,
-      },
+    const status = await runChild(process.execPath, [nextProgram(), 'build'], {
+      NODE_ENV: 'production',
+      NEXT_TELEMETRY_DISABLED: '1',
+      NEXT_SERVER_ACTIONS_ENCRYPTION_KEY: ensureSecrets().NEXT_SERVER_ACTIONS_ENCRYPTION_KEY,
     })
     if (status !== 0) throw new Obstacle(`next build failed (status ${status}). Its messages are above.`)
     writeFileSync(stamp, sources)

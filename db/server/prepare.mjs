@@ -1,6 +1,6 @@
-import { spawnSync } from 'node:child_process'
 import { existsSync } from 'node:fs'
 import { delimiter, join } from 'node:path'
+import { runChild } from './children.mjs'
 import { withLock } from './lock.mjs'
 import { postgresBinaries } from './postgres-binaries.mjs'
 import { ensureDataFolder, Obstacle, readJson, root, say } from './project.mjs'
@@ -19,7 +19,7 @@ export async function ensureDependencies() {
     say('Installing the packages of package-lock.json (npm ci) …')
     // `include=dev`: the build needs TypeScript whatever NODE_ENV says.
     const args = ['ci', '--include=dev', '--no-audit', '--no-fund']
-    const { status } = spawnSync('npm', args, { cwd: root, stdio: ['ignore', 2, 2] })
+    const status = await runChild('npm', args)
     if (status !== 0) throw new Obstacle(`npm ci failed (status ${status}). Its messages are above.`)
   })
 }
@@ -72,9 +72,8 @@ export async function ensurePackages(names) {
     )
   }
   say(`Installing Debian packages: ${missing.join(', ')} …`)
-  const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' }
   for (const args of [['update'], install]) {
-    const { status } = spawnSync('apt-get', args, { env, stdio: ['ignore', 2, 2] })
+    const status = await runChild('apt-get', args, { DEBIAN_FRONTEND: 'noninteractive' })
     if (status !== 0) throw new Obstacle(`apt-get ${args.join(' ')} failed (status ${status}).`)
   }
   const still = missing.filter((name) => !debianPackages[name]())

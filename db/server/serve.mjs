@@ -1,6 +1,7 @@
 import { spawn } from 'node:child_process'
 import { setTimeout as sleep } from 'node:timers/promises'
 import { nextProgram } from './build.mjs'
+import { track } from './children.mjs'
 import { Obstacle, root } from './project.mjs'
 
 /**
@@ -14,6 +15,7 @@ export async function serve({ port, dev = false, env, output = 'inherit' }) {
     stdio: ['ignore', output, output],
     env: serverEnvironment(dev, env),
   })
+  track(child)
   const ended = new Promise((resolve) => child.once('exit', resolve))
   const address = `http://localhost:${port}`
   const ready = await Promise.race([
@@ -51,11 +53,12 @@ function serverEnvironment(/** @type {boolean} */ dev, /** @type {Record<string,
   })
 }
 
-async function untilAnswers(/** @type {string} */ address) {
+async function untilAnswers(/** @type {number} */ port, /** @type {AbortSignal} */ givenUp) {
   const deadline = Date.now() + 120_000
-  while (Date.now() < deadline) {
+  while (Date.now() < deadline && !givenUp.aborted) {
     try {
-      await fetch(address, { redirect: 'manual', signal: AbortSignal.timeout(60_000) })
+      const signal = AbortSignal.timeout(60_000)
+      await fetch(`http://127.0.0.1:${port}/sign-in`, { redirect: 'manual', signal })
       return true
     } catch {
       await sleep(150)

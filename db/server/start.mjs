@@ -1,6 +1,6 @@
-import { spawnSync } from 'node:child_process'
 import { join } from 'node:path'
 import { ensureBuilt } from './build.mjs'
+import { endChildren, runChild } from './children.mjs'
 import { openDatabase } from './local.mjs'
 import { lockHolder, processMark, takeLock } from './lock.mjs'
 import { freePort } from './ports.mjs'
@@ -25,14 +25,20 @@ runMain(async () => {
   }
   /** In reverse order of starting. @type {(() => Promise<void> | void)[]} */
   const undo = [unlock]
-  const stopping = stopOnce(undo)
-  for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => void stopping(0))
+  const end = endOnce(undo)
+  for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => void end(0))
   try {
     await endLeftover(runFile)
     await ensureDependencies()
     if (!process.env.DATABASE_URL) await ensurePackages(['postgresql'])
-    const database = await openDatabase()
-    undo.unshift(database.release)
+    const opening = openDatabase()
+    undo.unshift(() =>
+      opening.then(
+        (opened) => opened.release(),
+        () => {},
+      ),
+    )
+    const database = await opening
     const environment = await prepareDatabase(database)
     if (!dev) await ensureBuilt()
     const port = await freePort(wantedPort())
@@ -40,10 +46,9 @@ runMain(async () => {
     undo.unshift(server.stop)
     writePrivateJson(runFile, { address: server.address, web: processMark(server.child.pid) })
     say(`\nPanewright is at ${server.address}\n${demoLines(database.outside)}\nCtrl-C ends it.\n`)
-    void server.ended.then(() => stopping(1))
+    void server.ended.then(() => end(1))
   } catch (error) {
-    await undoAll(undo)
-    throw error
+    await end(1, error)
   }
 })
 
@@ -51,18 +56,14 @@ runMain(async () => {
 async function prepareDatabase(/** @type {import('./local.mjs').OpenDatabase} */ database) {
   const { outside, ownerUrl, appUrl } = database
   const application = outside && !process.env.APP_DATABASE_URL ? undefined : appUrl
-  const env = {
-    ...process.env,
-    DATABASE_URL: ownerUrl,
-    ...(application ? { APP_DATABASE_URL: application } : {}),
-  }
+  const env = { DATABASE_URL: ownerUrl, ...(application ? { APP_DATABASE_URL: application } : {}) }
   const args = [
     '--import',
     'tsx',
     join(root, 'db/server/prepare-database.ts'),
     ...(seedsDemo(outside) ? ['--demo'] : []),
   ]
-  const { status } = spawnSync(process.execPath, args, { cwd: root, env, stdio: ['ignore', 2, 2] })
+  const status = await runChild(process.execPath, args, env)
   if (status !== 0) throw new Obstacle('The database could not be prepared. The reason is above.')
   return application ? { APP_DATABASE_URL: application } : { DATABASE_URL: ownerUrl }
 }
@@ -89,16 +90,21 @@ function wantedPort() {
   throw new Obstacle(`PORT is "${text}"; a whole number from 1 to 65535 is expected.`)
 }
 
-function stopOnce(/** @type {(() => Promise<void> | void)[]} */ undo) {
-  let stopped = false
-  return async (/** @type {number} */ status) => {
-    if (stopped) return
-    stopped = true
-    await undoAll(undo)
-    process.exit(status)
+/**
+ * Gives a function that ends everything once, whatever calls it and how often: a signal, a server that ended, or a
+ * step that failed because a signal ended its child.
+ */
+function endOnce(/** @type {(() => Promise<void> | void)[]} */ undo) {
+  /** @type {Promise<void> | undefined} */
+  let ending
+  return (/** @type {number} */ status, /** @type {unknown} */ reason = undefined) => {
+    ending ??= (async () => {
+      endChildren()
+      for (const step of undo.splice(0)) await step()
+      if (reason instanceof Obstacle) say(reason.message)
+      else if (reason !== undefined) console.error(reason)
+      process.exit(status)
+    })()
+    return ending
   }
-}
-
-async function undoAll(/** @type {(() => Promise<void> | void)[]} */ undo) {
-  for (const step of undo.splice(0)) await step()
 }
