@@ -15,10 +15,7 @@ export default function NotFound() {
         </Link>
       }
     >
-      <p>
-        The workbook may have been removed, or it belongs to another firm. Addresses are shown in full only to
-        people who may open them.
-      </p>
+      <p>The address may be mistyped, or the workbook has been removed, or it is not your firm's.</p>
     </Notice>
   )
 }

@@ -6,7 +6,7 @@ type Point = readonly [along: number, across: number, up: number]
 /** Parallel projection from the front right corner, a little from above; so parallel edges stay parallel. */
 function at([along, across, up]: Point): string {
   const x = 12 + along * 2.6 + across * 1.7
-  const y = 96 + along * 0.95 - across * 1.5 - up * 3.1
+  const y = 84 + along * 0.95 - across * 0.95 - up * 3.1
   return `${x.toFixed(1)} ${y.toFixed(1)}`
 }
 
@@ -61,7 +61,7 @@ const measure = [
 export function Elevation() {
   return (
     <svg
-      viewBox="0 0 198 158"
+      viewBox="0 0 198 142"
       className="mx-auto w-full max-w-2xl"
       fill="none"
       stroke="currentColor"

@@ -30,6 +30,10 @@ export function ChoiceCards({
         aria-labelledby={id}
         value={value}
         onValueChange={onChange}
+        onKeyDown={(event) => {
+          // A button would be pressed by it; here, as from every field, it sends the form.
+          if (event.key === 'Enter') event.currentTarget.closest('form')?.requestSubmit()
+        }}
         className="grid gap-3 sm:grid-cols-2"
       >
         {choices.map((choice) => (

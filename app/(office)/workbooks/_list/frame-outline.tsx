@@ -25,7 +25,7 @@ const glazing: Readonly<Record<Frame, string>> = {
 /** End elevation of a frame type; decoration beside its name. */
 export function FrameOutline({ frame }: { readonly frame: Frame }) {
   return (
-    <svg viewBox="0 0 64 46" className="w-16" fill="none" stroke="currentColor" aria-hidden="true">
+    <svg viewBox="0 0 64 46" className="w-14 shrink-0" fill="none" stroke="currentColor" aria-hidden="true">
       <path d={glazing[frame]} strokeWidth="0.8" className="text-quiet" stroke="currentColor" />
       <path d={outlines[frame]} strokeWidth="1.8" strokeLinejoin="round" />
     </svg>

@@ -6,15 +6,21 @@ interface Actions {
   readonly search: RefObject<HTMLInputElement | null>
   /** Absent when this person may not make workbooks. */
   readonly onNew?: (() => void) | undefined
+  readonly onPalette: () => void
 }
 
-/** Arrows, Home and End move along the rows; `/` goes to the search field, `n` makes a workbook. */
-export function useListKeys({ list, search, onNew }: Actions): void {
+/** Ctrl or Cmd+K opens the palette. Arrows, Home and End move along the rows; `/` goes to the search field, `n` makes a workbook. */
+export function useListKeys({ list, search, onNew, onPalette }: Actions): void {
   const singleKeys = useSingleKeys()
   useEffect(() => {
     function onKeyDown(event: KeyboardEvent): void {
+      if ((event.ctrlKey || event.metaKey) && !event.altKey && event.key.toLowerCase() === 'k') {
+        event.preventDefault()
+        if (!inDialog(event.target)) onPalette()
+        return
+      }
       if (event.defaultPrevented || event.ctrlKey || event.metaKey || event.altKey) return
-      if (event.target instanceof Element && event.target.closest('[role="menu"], [role="dialog"]')) return
+      if (inDialog(event.target)) return
       if (isTyping(event.target) && event.target !== search.current) return
       const moved = moveAlong(list.current, event.key, event.target, search.current)
       if (moved || (singleKeys && !isTyping(event.target) && act(event.key))) event.preventDefault()
@@ -27,7 +33,11 @@ export function useListKeys({ list, search, onNew }: Actions): void {
     }
     document.addEventListener('keydown', onKeyDown)
     return () => document.removeEventListener('keydown', onKeyDown)
-  }, [list, search, onNew, singleKeys])
+  }, [list, search, onNew, onPalette, singleKeys])
+}
+
+function inDialog(target: EventTarget | null): boolean {
+  return target instanceof Element && target.closest('[role="menu"], [role="dialog"]') !== null
 }
 
 /** Up from the first row goes back to the search field; down from the field goes to the first row. */

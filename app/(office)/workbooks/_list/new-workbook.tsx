@@ -32,7 +32,7 @@ export function NewWorkbook({
       open={open}
       onOpenChange={onOpenChange}
       title="New workbook"
-      about="It opens with the usual sheets and prices; every figure in them can be changed."
+      about="It opens with the usual sheets and prices filled in."
     >
       <NewWorkbookForm onCancel={() => onOpenChange(false)} />
     </Dialog>

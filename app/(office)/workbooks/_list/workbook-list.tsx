@@ -1,6 +1,7 @@
 'use client'
 
 import { Plus } from 'lucide-react'
+import dynamic from 'next/dynamic'
 import { useCallback, useRef, useState } from 'react'
 import { Button } from '@/app/_ui/button'
 import { EmptyList } from './empty-list'
@@ -11,6 +12,11 @@ import type { ListedWorkbook } from './row'
 import { RowDialogs } from './row-dialogs'
 import type { RowAction } from './row-menu'
 import { SearchBox } from './search-box'
+
+/** With every command in it, so it is fetched when it is first asked for. */
+const ListPalette = dynamic(() => import('./list-palette').then((module) => module.ListPalette), {
+  ssr: false,
+})
 
 const headings = ['Workbook', 'Covering area', 'Design heat loss', 'Quotation', 'Changed', '']
 
@@ -27,9 +33,11 @@ export function WorkbookList({
   const list = useRef<HTMLUListElement>(null)
   const field = useRef<HTMLInputElement>(null)
   const [making, setMaking] = useState(false)
+  const [palette, setPalette] = useState<'never' | 'open' | 'closed'>('never')
   const [chosen, choose] = useState<{ readonly action: RowAction; readonly workbook: ListedWorkbook }>()
   const openNew = useCallback(() => setMaking(true), [])
-  useListKeys({ list, search: field, onNew: mayChange ? openNew : undefined })
+  const openPalette = useCallback(() => setPalette('open'), [])
+  useListKeys({ list, search: field, onNew: mayChange ? openNew : undefined, onPalette: openPalette })
 
   return (
     <main className="mx-auto w-full max-w-6xl px-4 py-8 sm:px-8">
@@ -78,6 +86,14 @@ export function WorkbookList({
       )}
       <Hints mayChange={mayChange} />
       <NewWorkbook open={making} onOpenChange={setMaking} />
+      {palette === 'never' ? null : (
+        <ListPalette
+          open={palette === 'open'}
+          onClose={() => setPalette('closed')}
+          workbooks={workbooks}
+          mayChange={mayChange}
+        />
+      )}
       <RowDialogs chosen={chosen} onDone={() => choose(undefined)} />
     </main>
   )
@@ -105,6 +121,9 @@ function Hints({ mayChange }: { readonly mayChange: boolean }) {
           <kbd>N</kbd> new workbook
         </span>
       ) : null}
+      <span>
+        <kbd>Ctrl K</kbd> everything else
+      </span>
     </p>
   )
 }
