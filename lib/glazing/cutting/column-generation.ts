@@ -156,6 +156,7 @@ function pricePatterns(
       option.capacity,
       cost,
       instance.tolerance,
+      instance.nests,
     )
     if (filling.upper > cost * (1 + 1e-12))
       shrink = Math.min(shrink, Math.max(0, cost) / Math.max(1e-12, filling.upper))

@@ -1,4 +1,4 @@
-import type { Instance, Pattern } from './problem'
+import { type Instance, type Pattern, used } from './problem'
 
 /** Bars as patterns, one entry a bar; `undefined` when the limited stock does not suffice. */
 export type Bars = Pattern[]
@@ -13,24 +13,33 @@ export function bestFit(
   opening: number,
   left: readonly number[],
 ): Bars | undefined {
-  const { stock, weights, tolerance } = instance
-  const open: { stock: number; room: number; counts: number[] }[] = []
+  const { stock, weights, nests, tolerance } = instance
+  // `alone` holds the slopes that have a piece without a partner in the bar.
+  const open: { stock: number; room: number; counts: number[]; alone: Set<number> }[] = []
   const remaining = [...left]
   for (const type of order) {
-    const weight = weights[type] ?? 0
+    const nest = nests[type]
+    const half = nest?.half ?? 0
+    const whole = (weights[type] ?? 0) + half
     let target: (typeof open)[number] | undefined
-    for (const bar of open)
-      if (bar.room + tolerance >= weight && bar.room < (target?.room ?? Number.POSITIVE_INFINITY))
-        target = bar
+    for (const bar of open) {
+      if (bar.room >= (target?.room ?? Number.POSITIVE_INFINITY)) continue
+      const need = nest && bar.alone.has(nest.slope) ? whole - 2 * half : whole
+      if (bar.room + tolerance >= need) target = bar
+    }
     if (!target) {
-      const s = stockFor(instance, weight, opening, remaining)
+      const s = stockFor(instance, whole, opening, remaining)
       if (s === undefined) return undefined
       remaining[s] = (remaining[s] ?? 0) - 1
-      target = { stock: s, room: stock[s]?.capacity ?? 0, counts: weights.map(() => 0) }
+      target = { stock: s, room: stock[s]?.capacity ?? 0, counts: weights.map(() => 0), alone: new Set() }
       open.push(target)
     }
     target.counts[type] = (target.counts[type] ?? 0) + 1
-    target.room -= weight
+    if (nest && target.alone.delete(nest.slope)) target.room -= whole - 2 * half
+    else {
+      target.room -= whole
+      if (nest) target.alone.add(nest.slope)
+    }
   }
   return open.map(({ stock: s, counts }) => ({ stock: s, counts }))
 }
@@ -56,7 +65,7 @@ export function downsize(instance: Instance, bars: Bars, left: readonly number[]
   const remaining = [...left]
   for (const bar of bars) remaining[bar.stock] = (remaining[bar.stock] ?? 0) - 1
   return bars.map((bar) => {
-    const need = bar.counts.reduce((sum, count, i) => sum + count * (instance.weights[i] ?? 0), 0)
+    const need = used(instance, bar.counts)
     let best = bar.stock
     instance.stock.forEach((option, s) => {
       const now = instance.stock[best]

@@ -1,5 +1,5 @@
 import { costOf } from './constructive'
-import type { Instance, Pattern } from './problem'
+import { type Instance, oddOnes, type Pattern } from './problem'
 
 /** An integer program in CPLEX LP format → its optimum, or undefined; `optimal` says that it is proven. */
 export type SolveIntegerProgram = (
@@ -21,9 +21,14 @@ export function maximalPatterns(instance: Instance, limit: number): Pattern[] | 
       if (visits > limit * 20) return false
       const weight = weights[type]
       if (weight === undefined) {
-        const maximal = weights.every(
-          (other, i) => (counts[i] ?? 0) >= (demands[i] ?? 0) || room + tolerance < other,
-        )
+        const alone = oddOnes(instance, counts)
+        if (room + tolerance < alone) return true
+        const maximal = weights.every((other, i) => {
+          if ((counts[i] ?? 0) >= (demands[i] ?? 0)) return true
+          if (!instance.nests[i]) return room - alone + tolerance < other
+          const more = counts.map((count, k) => (k === i ? count + 1 : count))
+          return room + tolerance < other + oddOnes(instance, more)
+        })
         if (maximal) found.push({ stock: s, counts: [...counts] })
         return found.length <= limit
       }

@@ -1,6 +1,9 @@
+import { type Instance, oddOnes } from './problem'
+
 /**
  * The most valuable filling of one bar: max Σ value·count, Σ weight·count ≤ capacity, count ≤ bound.
  * Depth first over items by value per length, cut off by the fractional bound; weights may be any reals.
+ * Slanted pieces (`nests`) without a partner need their whole length; the fractional bound holds all the same.
  * Only fillings worth more than `floor` are looked for. `exact` is false when `nodeLimit` ended the search;
  * `upper` is then the fractional bound, otherwise the best value (or `floor` when none is better).
  */
@@ -11,6 +14,7 @@ export function bestFilling(
   capacity: number,
   floor: number,
   tolerance: number,
+  nests: Instance['nests'] = [],
   nodeLimit = 60_000,
 ): { readonly counts: number[] | undefined; readonly value: number; readonly upper: number } {
   const order = values
@@ -23,9 +27,18 @@ export function bestFilling(
   let bestCount: number[] | undefined
   let nodes = 0
 
+  const slanted = nests.some((nest) => nest !== undefined)
+  const oddAlone = (): number => {
+    const counts = new Array<number>(nests.length).fill(0)
+    order.forEach((item, depth) => {
+      counts[item.i] = count[depth] ?? 0
+    })
+    return oddOnes({ nests }, counts)
+  }
+
   const visit = (depth: number, room: number, value: number): void => {
     nodes += 1
-    if (value > best + 1e-12) {
+    if (value > best + 1e-12 && (!slanted || room + tolerance >= oddAlone())) {
       best = value
       bestCount = [...count]
     }

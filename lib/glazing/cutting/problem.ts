@@ -7,7 +7,21 @@ import { fail, type Result, succeed } from '../../failures'
 export interface CuttingProblem {
   readonly kerf: number
   readonly stock: readonly { readonly length: number; readonly price: number; readonly available?: number }[]
-  readonly pieces: readonly { readonly length: number; readonly count: number; readonly mark?: string }[]
+  readonly pieces: readonly {
+    readonly length: number
+    readonly count: number
+    readonly mark?: string
+    readonly nest?: Nest
+  }[]
+}
+
+/**
+ * A piece with a slanted end: two of the same slope out of one bar share the slanted cut, so that the second needs
+ * `saving` less length (the rise, less what the cut takes more than a square one).
+ */
+export interface Nest {
+  readonly slope: string
+  readonly saving: number
 }
 
 /** One bought bar: `stock` is its length, `pieces` the lengths cut from it in order, `offcut` what is left after the last cut. */
@@ -31,12 +45,20 @@ export interface CuttingPlan {
 
 /** The problem in solver form: distinct lengths, longest first, each with the saw cut added. */
 export interface Instance {
-  /** Piece length plus kerf. */
+  /** Piece length plus kerf, less half of what a slanted piece saves as one of two: never more than it takes of a bar. */
   readonly weights: readonly number[]
+  /** Of each type: its slope's number and half the saving; undefined for a square piece. */
+  readonly nests: readonly (InstanceNest | undefined)[]
+  readonly keys: readonly string[]
   readonly lengths: readonly number[]
   readonly demands: readonly number[]
   readonly stock: readonly StockOption[]
   readonly tolerance: number
+}
+
+export interface InstanceNest {
+  readonly slope: number
+  readonly half: number
 }
 
 export interface StockOption {
@@ -67,7 +89,8 @@ export function toInstance(problem: CuttingProblem): Result<Instance> {
   }
   const longest = Math.max(...stock.filter((bar) => bar.available !== 0).map((bar) => bar.length))
   const tolerance = 1e-9 * Math.max(1, ...stock.map((bar) => bar.length))
-  const demand = new Map<number, number>()
+  const types = new Map<string, PieceType>()
+  const slopes = new Map<string, number>()
   for (const piece of pieces) {
     const called = piece.mark === undefined ? `length ${piece.length}` : `${piece.mark} (${piece.length})`
     if (!(piece.length > 0) || !Number.isFinite(piece.length))
@@ -76,13 +99,21 @@ export function toInstance(problem: CuttingProblem): Result<Instance> {
       return fail('invalid', `Expected a whole count for piece ${called}, not ${piece.count}.`)
     if (piece.length > longest + tolerance)
       return fail('invalid', `Piece ${called} is longer than every stock length (longest ${longest}).`)
-    if (piece.count > 0) demand.set(piece.length, (demand.get(piece.length) ?? 0) + piece.count)
+    if (piece.count === 0) continue
+    const key = typeKey(piece)
+    const type = types.get(key)
+    if (type) type.demand += piece.count
+    else types.set(key, { key, length: piece.length, demand: piece.count, nest: nestOf(piece.nest, slopes) })
   }
-  const lengths = [...demand.keys()].sort((a, b) => b - a)
+  const list = [...types.values()].sort(
+    (a, b) => b.length - a.length || (a.key < b.key ? -1 : a.key > b.key ? 1 : 0),
+  )
   return succeed({
-    lengths,
-    weights: lengths.map((length) => length + kerf),
-    demands: lengths.map((length) => demand.get(length) ?? 0),
+    keys: list.map((type) => type.key),
+    lengths: list.map((type) => type.length),
+    weights: list.map((type) => type.length + kerf - (type.nest?.half ?? 0)),
+    nests: list.map((type) => type.nest),
+    demands: list.map((type) => type.demand),
     stock: stock
       .map(({ length, price, available = Number.POSITIVE_INFINITY }) => ({
         length,
@@ -95,12 +126,48 @@ export function toInstance(problem: CuttingProblem): Result<Instance> {
   })
 }
 
+interface PieceType {
+  readonly key: string
+  readonly length: number
+  readonly nest: InstanceNest | undefined
+  demand: number
+}
+
+/** Pieces of one key are the same to the saw. */
+export function typeKey({ length, nest }: { readonly length: number; readonly nest?: Nest }): string {
+  return nest && nest.saving > 0 ? `${length}|${nest.slope}` : String(length)
+}
+
+function nestOf(nest: Nest | undefined, slopes: Map<string, number>): InstanceNest | undefined {
+  if (!nest || !(nest.saving > 0)) return undefined
+  const slope = slopes.get(nest.slope) ?? slopes.size
+  slopes.set(nest.slope, slope)
+  return { slope, half: nest.saving / 2 }
+}
+
 /** A way to cut one bar: `counts[i]` pieces of `lengths[i]` from `stock[stock]`. */
 export interface Pattern {
   readonly stock: number
   readonly counts: readonly number[]
 }
 
+/** What the pieces take of a bar's capacity; of a slope's odd number of pieces one takes its whole length. */
 export function used(instance: Instance, counts: readonly number[]): number {
-  return counts.reduce((sum, count, i) => sum + count * (instance.weights[i] ?? 0), 0)
+  return counts.reduce((sum, count, i) => sum + count * (instance.weights[i] ?? 0), oddOnes(instance, counts))
+}
+
+/** What the slanted pieces without a partner take more than their weights say. */
+export function oddOnes({ nests }: Pick<Instance, 'nests'>, counts: readonly number[]): number {
+  let odd: Map<number, number> | undefined
+  let sum = 0
+  for (const [i, count] of counts.entries()) {
+    const nest = nests[i]
+    if (!nest || count % 2 === 0) continue
+    odd ??= new Map()
+    const alone = odd.get(nest.slope)
+    sum += alone === undefined ? nest.half : -alone
+    if (alone === undefined) odd.set(nest.slope, nest.half)
+    else odd.delete(nest.slope)
+  }
+  return sum
 }

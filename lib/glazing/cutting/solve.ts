@@ -2,7 +2,15 @@ import { fail, type Result, succeed } from '../../failures'
 import { relax } from './column-generation'
 import { type Bars, constructive, costOf, downsize } from './constructive'
 import { cheaper, coveringProgram, maximalPatterns, type SolveIntegerProgram, toBars } from './exact'
-import { type Bar, type CuttingPlan, type CuttingProblem, type Instance, toInstance, used } from './problem'
+import {
+  type Bar,
+  type CuttingPlan,
+  type CuttingProblem,
+  type Instance,
+  toInstance,
+  typeKey,
+  used,
+} from './problem'
 import { roundRelaxation } from './rounding'
 
 /**
@@ -41,12 +49,23 @@ export function solveCutting(
   return succeed(toPlan(problem, instance, downsize(instance, best, available), bound))
 }
 
+/** Cost of a plain best-fit plan: a first answer, without bound or search. Errors as `solveCutting`. */
+export function firstCut(problem: CuttingProblem): Result<number> {
+  const made = toInstance(problem)
+  if (!made.ok) return made
+  const instance = made.value
+  const available = instance.stock.map((option) => option.available)
+  const bars = constructive(instance, instance.demands, available, 0)
+  if (!bars) return fail('limit', 'The stock that is available does not suffice for all pieces.')
+  return succeed(costOf(instance, bars))
+}
+
 function slack(bound: number): number {
   return 1e-7 * Math.max(1, Math.abs(bound))
 }
 
 /** Costs come in steps of the prices' common measure, so a bound rises to the next step. */
-function stepUp(instance: Instance, bound: number): number {
+export function stepUp(instance: Instance, bound: number): number {
   const cents = instance.stock.map((option) => Math.round(option.price * 1e4))
   if (instance.stock.some((option, s) => Math.abs(option.price * 1e4 - (cents[s] ?? 0)) > 1e-6)) return bound
   const step = cents.reduce(greatestCommonDivisor, 0) / 1e4
@@ -58,11 +77,18 @@ function greatestCommonDivisor(a: number, b: number): number {
 }
 
 function toPlan(problem: CuttingProblem, instance: Instance, bars: Bars, bound: number): CuttingPlan {
-  const marks = new Map<number, (string | undefined)[]>()
+  const marks = new Map<string, { readonly mark: string; left: number }[]>()
   for (const piece of problem.pieces) {
-    const list = marks.get(piece.length) ?? []
-    for (let k = 0; k < piece.count; k += 1) list.push(piece.mark)
-    marks.set(piece.length, list)
+    const list = marks.get(typeKey(piece)) ?? []
+    if (piece.count > 0) list.push({ mark: piece.mark ?? '', left: piece.count })
+    marks.set(typeKey(piece), list)
+  }
+  const nextMark = (type: number): string => {
+    const list = marks.get(instance.keys[type] ?? '') ?? []
+    const first = list.find((entry) => entry.left > 0)
+    if (!first) return ''
+    first.left -= 1
+    return first.mark
   }
   const marked = problem.pieces.some((piece) => piece.mark !== undefined)
   const order = bars
@@ -72,10 +98,11 @@ function toPlan(problem: CuttingProblem, instance: Instance, bars: Bars, bound: 
         (b.option?.length ?? 0) - (a.option?.length ?? 0) || compareCounts(a.bar.counts, b.bar.counts),
     )
   const cut: Bar[] = order.map(({ bar, option }) => {
-    const pieces = bar.counts.flatMap((count, i) => new Array<number>(count).fill(instance.lengths[i] ?? 0))
+    const types = bar.counts.flatMap((count, i) => new Array<number>(count).fill(i))
+    const pieces = types.map((type) => instance.lengths[type] ?? 0)
     const length = option?.length ?? 0
     const offcut = Math.max(0, length - used(instance, bar.counts))
-    const named = marked ? { marks: pieces.map((piece) => marks.get(piece)?.shift() ?? '') } : {}
+    const named = marked ? { marks: types.map(nextMark) } : {}
     return { stock: length, pieces, ...named, offcut: offcut < instance.tolerance ? 0 : offcut }
   })
   const cost = costOf(instance, bars)
