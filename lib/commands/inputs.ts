@@ -2,8 +2,16 @@ import type { Area, CellAddress, NamedValue, Operation } from '../workbook'
 import type { CommandContext } from './command'
 import { lowerFirst } from './words'
 
-/** The named inputs in the order of the sheets, then down each sheet. */
-export function namedInputs({ workbook }: CommandContext): readonly NamedValue[] {
+const inputsOf = new WeakMap<CommandContext, readonly NamedValue[]>()
+
+/** The named inputs in the order of the sheets, then down each sheet. A context is of one moment: sorted once. */
+export function namedInputs(context: CommandContext): readonly NamedValue[] {
+  const known = inputsOf.get(context) ?? sortedInputs(context)
+  inputsOf.set(context, known)
+  return known
+}
+
+function sortedInputs({ workbook }: CommandContext): readonly NamedValue[] {
   const order = new Map(workbook.sheets.map((sheet, index) => [sheet.id, index]))
   const place = ({ area }: NamedValue) =>
     (order.get(area.sheet) ?? workbook.sheets.length) * 1e9 + area.row * 1e3 + area.column

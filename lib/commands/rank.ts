@@ -36,7 +36,15 @@ export function rank<T extends Rankable>(
   { limit = 50, recent = [] }: RankOptions = {},
 ): readonly Ranked<T>[] {
   const folded = fold(query)
-  const asked: Query = { text: folded, words: withoutFillers(wordsOf(folded)) }
+  const words = wordsOf(folded)
+  const asked: Query = {
+    text: folded,
+    words: withoutFillers(words),
+    compact: words.join(''),
+    begins: `${folded} `,
+    later: ` ${folded}`,
+    typos: new Map(),
+  }
   const lately = new Map(recent.map((id, index) => [id, Math.max(1, 8 - index)]))
   const found: Ranked<T>[] = []
   const seen = new Set<string>()
@@ -64,18 +72,27 @@ function byScore<T extends Rankable>(a: Ranked<T>, b: Ranked<T>): number {
 interface Query {
   readonly text: string
   readonly words: readonly string[]
+  readonly compact: string
+  /** The text with a gap after it, and before it: whole words at the beginning, beginnings of later words. */
+  readonly begins: string
+  readonly later: string
+  /** Typos by asked word and then by word of an entry: entries share most of their words. */
+  readonly typos: Map<string, Map<string, number>>
 }
 
 interface Prepared {
   readonly text: string
   readonly words: readonly string[]
   readonly initials: string
+  /** Without the gaps between words: "takeoff" is "Take-off". */
+  readonly compact: string
 }
 
 interface PreparedEntry {
   readonly texts: readonly Prepared[]
   /** The words of all its texts, each once. */
   readonly words: readonly string[]
+  readonly joined: string
 }
 
 const prepared = new WeakMap<Rankable, PreparedEntry>()
@@ -88,38 +105,48 @@ function prepare(entry: Rankable): PreparedEntry {
     const folded = fold(text)
     const words = wordsOf(folded)
     const initials = words.map((word) => word[0] ?? '').join('')
-    return { text: folded.includes('_') ? words.join(' ') : folded, words, initials }
+    return { text: folded.includes('_') ? words.join(' ') : folded, words, initials, compact: words.join('') }
   })
-  const made = { texts, words: [...new Set(texts.flatMap(({ words }) => words))] }
+  const words = [...new Set(texts.flatMap((text) => text.words))]
+  const made = { texts, words, joined: words.join(' ') }
   prepared.set(entry, made)
   return made
 }
 
 /** 0 for no match, else up to 100. */
 function matchOf(entry: Rankable, query: Query): number {
-  const { texts, words } = prepare(entry)
+  const { texts, words, joined } = prepare(entry)
+  const match = query.words.every((word) => joined.includes(word)) ? matchText : matchShort
   let best = 0
   for (let index = 0; index < texts.length; index++) {
     const text = texts[index]
-    const score = text ? matchText(text, query) * (index === 0 ? 1 : 0.96) : 0
+    const score = text ? match(text, query) * (index === 0 ? 1 : 0.96) : 0
     if (score > best) best = score
   }
   if (best >= 40) return best
   // Words may also be spread over the title and the other words ("triple TP16").
-  return Math.max(best, matchLoosely(words, query.words))
+  return Math.max(best, matchLoosely(words, query))
 }
 
-function matchText({ text, words, initials }: Prepared, query: Query): number {
+function matchText(prepared: Prepared, query: Query): number {
+  const { text, words } = prepared
   if (text === query.text) return 100
   const closeness = query.text.length / Math.max(text.length, query.text.length)
-  if (text.startsWith(`${query.text} `)) return 91 + 4 * closeness
+  if (text.startsWith(query.begins)) return 91 + 4 * closeness
   if (text.startsWith(query.text)) return 86 + 4 * closeness
-  if (text.includes(` ${query.text}`)) return 80 + 6 * closeness
+  if (text.includes(query.later)) return 80 + 6 * closeness
   const order = prefixMatch(words, query.words)
   if (order > 0) return order + 6 * closeness
-  if (query.text.length >= 2 && initials.startsWith(query.text)) return 60
+  const short = matchShort(prepared, query)
+  if (short > 0) return short
   if (query.text.length >= 3 && text.includes(query.text)) return 52 + 6 * closeness
   return 0
+}
+
+/** "takeoff" for "Take-off", "gtc" for "Go to a cell": the words run together, or their first letters. */
+function matchShort({ compact, initials }: Prepared, query: Query): number {
+  if (query.compact.length >= 4 && compact.startsWith(query.compact)) return 64
+  return query.text.length >= 2 && initials.startsWith(query.text) ? 60 : 0
 }
 
 /** Every word of the query begins a word: 72 in their order, 64 in any order, else 0. */
@@ -140,7 +167,7 @@ function prefixMatch(words: readonly string[], asked: readonly string[]): number
 }
 
 /** Every word begins a word, stands within one, or is a typo of one: at most 48. */
-function matchLoosely(words: readonly string[], asked: readonly string[]): number {
+function matchLoosely(words: readonly string[], { words: asked, typos: known }: Query): number {
   if (asked.length === 0) return 0
   let score = 48
   for (const word of asked) {
@@ -149,7 +176,7 @@ function matchLoosely(words: readonly string[], asked: readonly string[]): numbe
       score -= 4
       continue
     }
-    const typos = fewestTypos(words, word)
+    const typos = fewestTypos(words, word, known)
     if (typos === 0) return 0
     score -= 6 * typos
   }
@@ -157,13 +184,17 @@ function matchLoosely(words: readonly string[], asked: readonly string[]): numbe
 }
 
 /** Typos between `word` and the nearest word or beginning of a word; 0 when none is near enough. */
-function fewestTypos(words: readonly string[], word: string): number {
+function fewestTypos(words: readonly string[], word: string, known: Query['typos']): number {
   const allowed = word.length >= 7 ? 2 : word.length >= 4 ? 1 : 0
   if (allowed === 0) return 0
+  const counted = known.get(word) ?? new Map<string, number>()
+  known.set(word, counted)
   let fewest = allowed + 1
   for (const candidate of words) {
     if (candidate.length < word.length - allowed || !sharesStart(candidate, word)) continue
-    fewest = Math.min(fewest, distanceToStart(word, candidate, fewest))
+    const typos = counted.get(candidate) ?? distanceToStart(word, candidate, allowed + 1)
+    counted.set(candidate, typos)
+    fewest = Math.min(fewest, typos)
   }
   return fewest <= allowed ? fewest : 0
 }

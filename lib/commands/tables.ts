@@ -1,6 +1,7 @@
 import type { CellValue, Sheet, Workbook } from '../workbook'
 import { cellAt, isCellError, type NamedValue, sheetById, sheetByName } from '../workbook'
 import type { ArgumentOption, CommandContext } from './command'
+import { showValue } from './measures'
 
 /** Where a table stands on its sheet. */
 export interface Table {
@@ -33,20 +34,37 @@ export function wholeSheet(sheet: Sheet): Table {
   return { sheet, headerRow: 0, firstRow: 1, rowCount: sheet.rowCount - 1 }
 }
 
-/** Rows with a code in their first column. A quiet row only marks where the table closes. */
+const rowsOf = new WeakMap<CommandContext, Map<string, readonly TableRow[]>>()
+
+/**
+ * Rows with a code in their first column. A quiet row only marks where the table closes.
+ * A context is of one moment, and is asked at every key: read once.
+ */
 export function tableRows(context: CommandContext, table: Table): readonly TableRow[] {
+  const known = rowsOf.get(context) ?? new Map<string, readonly TableRow[]>()
+  rowsOf.set(context, known)
+  const key = `${table.sheet.id} ${table.firstRow} ${table.rowCount}`
+  const rows = known.get(key) ?? readRows(context, table)
+  known.set(key, rows)
+  return rows
+}
+
+function readRows(context: CommandContext, table: Table): readonly TableRow[] {
   const { sheet } = table
   const titles = sheet.columns.map((_, column) => textAt(context, sheet, table.headerRow, column))
   const nameColumn = columnTitled(titles, /^(name|description|covering|what|title)\b/i, 1)
   const figureColumn = resistanceColumn(table, titles)
-  const details = detailColumns(titles, nameColumn)
+  const details = detailColumns(table, titles, nameColumn)
   const rows: TableRow[] = []
   for (let row = table.firstRow; row < table.firstRow + table.rowCount; row++) {
     const cells = sheet.rows[row]
     const code = cells && cells[0]?.format?.style !== 'quiet' ? textAt(context, sheet, row, 0) : ''
     if (code === '') continue
     const name = textAt(context, sheet, row, nameColumn) || code
-    const detail = details.map((column) => textAt(context, sheet, row, column)).filter(Boolean)
+    const detail = details.flatMap(({ column, quantity, words }) => {
+      const held = context.value({ sheet: sheet.id, row, column })
+      return textOf(held) === '' ? [] : [words(showValue(context, held, quantity))]
+    })
     const value = figureColumn === -1 ? null : context.value({ sheet: sheet.id, row, column: figureColumn })
     const figure = { label: 'R', value, quantity: 'thermal-resistance' } as const
     rows.push({
@@ -108,8 +126,19 @@ function resistanceColumn({ sheet, firstRow }: Table, titles: readonly string[])
   )
 }
 
-/** Columns whose words tell rows apart at a glance. */
-function detailColumns(titles: readonly string[], nameColumn: number): readonly number[] {
-  const telling = /^(diffus|kind|type|construction|light type|clarity|family)/i
-  return titles.flatMap((title, column) => (column !== nameColumn && telling.test(title) ? [column] : []))
+/** What tells rows apart at a glance, column by column, as words: "diffusing", "62% light", "life 10 years". */
+const telling: readonly (readonly [title: RegExp, words: (shown: string) => string])[] = [
+  [/^(kind|type|construction|light|unit)$/i, (shown) => shown],
+  [/^light transmittance$/i, (shown) => `${shown} light`],
+  [/^life$/i, (shown) => `life ${shown}`],
+]
+
+function detailColumns({ sheet, firstRow }: Table, titles: readonly string[], nameColumn: number) {
+  return telling.flatMap(([form, words]) => {
+    const column = titles.findIndex((title) => form.test(title))
+    if (column <= 0 || column === nameColumn) return []
+    const quantity =
+      sheet.rows[firstRow]?.[column]?.format?.quantity ?? sheet.columns[column]?.quantity ?? 'text'
+    return [{ column, quantity, words }]
+  })
 }

@@ -111,6 +111,12 @@ const table: readonly (readonly [query: string, expected: string])[] = [
   ['new workbook Hill farm', '!typed:new-workbook:text'],
 ]
 
+/** Milliseconds of computing: what others do on the machine meanwhile does not count. */
+function cpuTime(): number {
+  const { user, system } = process.cpuUsage()
+  return (user + system) / 1000
+}
+
 describe('the palette finds', () => {
   it.each(table)('[C1] %s → %s', (query, expected) => {
     const ids = searchCommands(index, query).map(({ id }) => id)
@@ -194,7 +200,9 @@ describe('ranking', () => {
     expect(rank(entries, 'row').map(({ entry }) => entry.id)).toEqual(['c', 'a', 'b'])
   })
 
-  it('searches a workbook of more than 5,000 entries within 50 ms, arguments typed in the line among them', () => {
+  it('searches a workbook of more than 5,000 entries within 50 ms, arguments typed in the line among them', {
+    timeout: 60_000,
+  }, () => {
     const large = house()
     for (let i = 0; i < 5000; i++) {
       const area = { sheet: 'frame', row: 1 + (i % 30), column: 1, rowCount: 1, columnCount: 1 }
@@ -206,16 +214,16 @@ describe('ranking', () => {
     expect(found.entries.length).toBeGreaterThan(5000)
     for (const query of ["frame width 24'", 'cover roof triple', 'purlin 77', 'pruline legnth', 'heat b7']) {
       searchCommands(found, query)
-      const laps = Array.from({ length: 7 }, () => {
-        const start = performance.now()
+      const laps = Array.from({ length: 5 }, () => {
+        const start = cpuTime()
         searchCommands(found, query)
-        return performance.now() - start
+        return cpuTime() - start
       })
       expect(Math.min(...laps), query).toBeLessThan(50)
     }
   })
 
-  it('answers within 50 ms at 5,000 entries', () => {
+  it('answers within 50 ms at 5,000 entries', { timeout: 60_000 }, () => {
     const words = ['frame', 'width', 'covering', 'polycarbonate', 'heat', 'triple', 'ridge', 'purlin', 'snow']
     const entries = Array.from({ length: 5000 }, (_, i) => ({
       id: `e${i}`,
@@ -224,10 +232,10 @@ describe('ranking', () => {
     }))
     rank(entries, 'warm up')
     const times = ['polycarbonte', 'frame wid', 'x', 'tripel snwo', 'covering 4'].map((query) => {
-      const laps = Array.from({ length: 7 }, () => {
-        const start = performance.now()
+      const laps = Array.from({ length: 5 }, () => {
+        const start = cpuTime()
         rank(entries, query)
-        return performance.now() - start
+        return cpuTime() - start
       })
       return Math.min(...laps)
     })

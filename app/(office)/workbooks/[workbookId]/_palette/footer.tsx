@@ -25,7 +25,7 @@ export function Footer({
       {words.enter ? <Key cap="Enter" word={words.enter} /> : null}
       {words.tab ? <Key cap="Tab" word={words.tab} /> : null}
       <Key cap="Esc" word={words.escape} />
-      <span className="min-w-0 text-ink max-sm:order-first max-sm:w-full sm:ml-auto sm:max-w-[60%] sm:text-right">
+      <span className="min-w-0 text-ink max-sm:order-first max-sm:w-full sm:min-w-52 sm:flex-1 sm:text-right">
         {says}
         {trials.saved && undo ? ` ${keyLabel(undo, platform)} undoes it.` : ''}
         {changes.map((change) => (
@@ -60,7 +60,7 @@ function keyWords(palette: PaletteState, context: CommandContext): Words {
     const missing = 'args' in now ? nextArgument(stage.command, context, now.args) : undefined
     const specs = stage.command.arguments ?? []
     return {
-      enter: missing ? 'next' : 'do it',
+      enter: 'problem' in now ? undefined : missing ? 'next' : 'do it',
       tab: specs.at(-1)?.id === stage.spec.id ? undefined : 'next argument',
       escape: 'back',
     }
@@ -71,7 +71,7 @@ function keyWords(palette: PaletteState, context: CommandContext): Words {
   const goes = entry?.command.group === 'Go to'
   return {
     enter: entry?.available !== true ? undefined : missing ? 'fill it in' : goes ? 'go there' : 'do it',
-    tab: asks && !goes && entry.available === true ? 'arguments' : undefined,
+    tab: asks && !goes && !missing && entry.available === true ? 'change a part' : undefined,
     escape: 'close',
   }
 }

@@ -25,7 +25,9 @@ export function Line({ ref, list, palette, context }: LineProps) {
       label={labelOf(palette)}
       placeholder={
         stage.kind === 'find'
-          ? 'Type a command, a sheet, or a value: frame width 24'
+          ? context.workbook.sheets.length > 0
+            ? 'Type a command, a sheet, or a value: frame width 24'
+            : 'Type a command or a workbook'
           : promptOf(stage.spec, context, stage.args)
       }
       describedBy={remark || message ? note : undefined}

@@ -33,7 +33,9 @@ export type PaletteState = ReturnType<typeof usePalette>
 
 /** The palette's behaviour, without its looks. */
 export function usePalette({ context, onRun, onClose, begin: start }: PaletteProps) {
-  const [index] = useState(() => makeIndex(context))
+  const [index, setIndex] = useState(() => makeIndex(context))
+  // The firm's workbooks may arrive after the palette has opened.
+  if (index.context.workbooks !== context.workbooks) setIndex(makeIndex(context))
   const [recent] = useState(readRecent)
   const [query, setQuery] = useState('')
   const [stage, setStage] = useState<Stage>(() => startStage())
