@@ -1,6 +1,7 @@
 import { type ConfigParams, HyperFormula } from 'hyperformula'
 import { limits } from '../limits'
 import { DecimalFunctions } from './functions'
+import { registerTextBounds } from './text-bounds'
 
 /** Function that the engine puts around formulas which could give more than one value. */
 export const oneValue = 'ONE_VALUE'
@@ -11,6 +12,7 @@ let registered = false
 export function registerFunctions(): void {
   if (registered) return
   registered = true
+  registerTextBounds()
   HyperFormula.registerFunctionPlugin(DecimalFunctions, { enGB: { [oneValue]: oneValue } })
 }
 

@@ -43,7 +43,7 @@ type Raw = EngineValue | CellError
 type Changes = (address: CellAddress, value: Raw) => void
 
 /** Circles whose path is looked for in one list of changes; the others are named without it. */
-const mostCircles = 200
+const mostCircles = 20
 
 class WorkbookEngine implements Engine {
   private readonly workbook: Workbook

@@ -7,6 +7,7 @@ import {
 } from 'hyperformula'
 import { limits } from '../limits'
 import { ceilingDecimal, floorDecimal, roundDecimal, tidy } from './rounding'
+import { joinBounded } from './text-bounds'
 
 type Interpreter = ConstructorParameters<typeof FunctionPlugin>[0]
 type Ast = Parameters<Interpreter['evaluateAst']>[0]
@@ -38,6 +39,11 @@ export class DecimalFunctions extends FunctionPlugin {
       parameters: [{ argumentType: FunctionArgumentType.STRING }, number],
     },
     ONE_VALUE: { method: 'oneValue', parameters: [{ argumentType: FunctionArgumentType.RANGE }] },
+  }
+
+  constructor(interpreter: Interpreter) {
+    super(interpreter)
+    interpreter.arithmeticHelper.concat = joinBounded
   }
 
   round(ast: Call, state: State): Value {

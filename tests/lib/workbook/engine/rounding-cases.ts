@@ -1,0 +1,67 @@
+/**
+ * Formulas and their values in LibreOffice Calc 7.4.7 (Debian 12), which recomputes them in `rounding.sheet.test.ts`.
+ * `known` lists where this engine differs from it on purpose: it rounds the decimal value of 15 significant digits always.
+ */
+export const roundingCases: readonly (readonly [formula: string, value: number])[] = [
+  ['ROUND(1.005,2)', 1.01],
+  ['ROUND(2.675,2)', 2.68],
+  ['ROUND(33.335,2)', 33.34],
+  ['ROUND(12345678901.235,2)', 12345678901.24],
+  ['ROUND(-1.005,2)', -1.01],
+  ['ROUND(-2.5,0)', -3],
+  ['ROUND(1250,-2)', 1300],
+  ['ROUND(0.285,2)', 0.29],
+  ['ROUND(1.005*100,2)', 100.5],
+  ['ROUND(4.35*100,0)', 435],
+  ['ROUND(1.00499999999999,2)', 1],
+  ['ROUND(1.5,0.9)', 2],
+  ['ROUNDUP(0.1*3*10,0)', 3],
+  ['ROUNDUP(1.1*1.1,2)', 1.21],
+  ['ROUNDUP(-0.1*3*10,0)', -3],
+  ['ROUNDUP(4.35*100,0)', 435],
+  ['ROUNDUP(2.01,0)', 3],
+  ['ROUNDUP(0,2)', 0],
+  ['ROUNDDOWN(4.35*100,0)', 435],
+  ['ROUNDDOWN(1.15*100,0)', 115],
+  ['ROUNDDOWN(-1.15*100,0)', -115],
+  ['ROUNDDOWN(0.29*100,0)', 29],
+  ['TRUNC(0.29*100)', 29],
+  ['TRUNC(-1.7)', -1],
+  ['INT(0.29*100)', 29],
+  ['INT(-1.5)', -2],
+  ['INT(-0.29*100)', -29],
+  ['INT(3.0000000000000004)', 3],
+  ['INT(2.9999999999999996)', 3],
+  ['INT(2.99999999999)', 2],
+  ['CEILING(0.1*3,0.1)', 0.3],
+  ['CEILING(-2.5,-1)', -3],
+  ['CEILING(-2.5,1)', -2],
+  ['CEILING(1.1*3,1.1)', 3.3],
+  ['CEILING(2.5,0)', 0],
+  ['FLOOR(0.7,0.1)', 0.7],
+  ['FLOOR(-2.5,-1)', -2],
+  ['FLOOR(-2.5,1)', -3],
+  ['FLOOR(4.35,0.05)', 4.35],
+  ['MROUND(0.3,0.1)', 0.3],
+  ['MROUND(7,3)', 6],
+  ['MROUND(-7,-3)', -6],
+  ['QUOTIENT(0.7,0.1)', 7],
+  ['QUOTIENT(21.9,0.3)', 73],
+  ['QUOTIENT(-7,2)', -3],
+  ['MOD(0.7,0.1)', 0],
+  ['MOD(-7,3)', 2],
+  ['MOD(21.9,0.3)', 0],
+  ['12345678901.23+0.01', 12345678901.24],
+  ['0.1+0.2-0.3', 0],
+  ['1.1-1-0.1', 0],
+]
+
+export const known: readonly (readonly [formula: string, ours: number, theirs: number])[] = [
+  // 21.9/0.2 is 109.500000000000 in 15 digits, 109.49999999999998… in binary.
+  ['ROUND(21.9/0.2,0)', 110, 109],
+  // Calc forgives a part of 1e-13 here; 15 digits still show it.
+  ['ROUNDUP(2.0000000000001,0)', 3, 2],
+  ['MROUND(1.005,0.01)', 1.01, 1],
+  // A sixteenth digit is not kept.
+  ['ROUND(1E15+0.5,0)', 1000000000000000, 1000000000000001],
+]
