@@ -5,10 +5,12 @@ export interface CommandLine {
   readonly input: string
   readonly json: boolean
   readonly xlsx?: string
+  readonly cuts?: string
 }
 
-export const usage = 'npm run --silent estimate -- --input FILE.json [--json] [--xlsx OUT.xlsx]'
-const flags = ['--input', '--json', '--xlsx'] as const
+export const usage =
+  'npm run --silent estimate -- --input FILE.json [--json] [--xlsx OUT.xlsx] [--cuts OUT.json]'
+const flags = ['--input', '--json', '--xlsx', '--cuts'] as const
 
 /** The command's arguments; each flag once. */
 export function readCommandLine(given: readonly string[]): Result<CommandLine> {
@@ -34,5 +36,11 @@ export function readCommandLine(given: readonly string[]): Result<CommandLine> {
   const input = files.get('--input')
   if (input === undefined) return fail('invalid', `Expected ${usage}.`)
   const xlsx = files.get('--xlsx')
-  return succeed({ input, json, ...(xlsx === undefined ? {} : { xlsx }) })
+  const cuts = files.get('--cuts')
+  return succeed({
+    input,
+    json,
+    ...(xlsx === undefined ? {} : { xlsx }),
+    ...(cuts === undefined ? {} : { cuts }),
+  })
 }

@@ -4,6 +4,7 @@ import { readFile, rename, rm, stat } from 'node:fs/promises'
 import { basename, dirname, join, resolve } from 'node:path'
 import { fail, type Result, succeed } from '../failures'
 import { readCommandLine } from './command-line'
+import { cutsOf, writeCuts } from './cuts/write-cuts.node'
 import { type Estimate, estimate } from './estimate'
 import { quoted } from './nearest'
 import { parseStrictJson } from './strict-json'
@@ -23,13 +24,27 @@ async function main(): Promise<Result<string>> {
   if (!json.ok) return json
   const made = estimate(json.value)
   if (!made.ok) return made
-  const { xlsx } = line.value
-  if (xlsx !== undefined) {
-    const written = await writeWorkbook(made.value, resolve(from, xlsx))
-    if (!written.ok) return written
-  }
+  const { xlsx, cuts } = line.value
+  const answers = await answerFiles(made.value, xlsx, cuts)
+  if (!answers.ok) return answers
   const { report } = made.value
   return succeed(line.value.json ? JSON.stringify(report) : summary(made.value))
+}
+
+/** The layout is made before anything is written: a house that cannot be laid out leaves no file behind. */
+async function answerFiles(
+  made: Estimate,
+  xlsx: string | undefined,
+  cuts: string | undefined,
+): Promise<Result<void>> {
+  const layout = cuts === undefined ? undefined : await cutsOf(made)
+  if (layout && !layout.ok) return layout
+  if (xlsx !== undefined) {
+    const written = await writeWorkbook(made, resolve(from, xlsx))
+    if (!written.ok) return written
+  }
+  if (layout && cuts !== undefined) return writeCuts(layout.value, resolve(from, cuts))
+  return succeed(undefined)
 }
 
 async function readInput(path: string): Promise<Result<string>> {

@@ -10,10 +10,11 @@ afterAll(() => rmSync(folder, { recursive: true, force: true }))
 const wait = 60_000
 
 function run(...words: string[]) {
-  const { status, stdout, stderr } = spawnSync(process.execPath, ['lib/estimate/run.mjs', ...words], {
-    encoding: 'utf8',
-    cwd: join(import.meta.dirname, '../../..'),
-  })
+  const { status, stdout, stderr } = spawnSync(
+    process.execPath,
+    ['lib/run.mjs', 'estimate/estimate.node.ts', ...words],
+    { encoding: 'utf8', cwd: join(import.meta.dirname, '../../..') },
+  )
   return { status, stdout, stderr }
 }
 
