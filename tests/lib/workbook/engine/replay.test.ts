@@ -63,7 +63,7 @@ describe('the live engine', () => {
           fresh.destroy()
         },
       ),
-      { numRuns: 300 },
+      { numRuns: 150 },
     )
   }, 60_000)
 })
