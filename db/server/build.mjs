@@ -16,6 +16,9 @@ const files = [
   'tsconfig.json',
 ]
 
+/** Runs beside the application, never in it. */
+const beside = 'db/server'
+
 /** A hash of every source the build reads; times are not looked at, since a fresh copy has new ones. */
 export function sourcesHash() {
   const hash = createHash('sha256')
@@ -27,6 +30,7 @@ export function sourcesHash() {
     const entries = readdirSync(join(root, folder), { withFileTypes: true })
     for (const entry of entries.sort((a, b) => (a.name < b.name ? -1 : 1))) {
       const path = `${folder}/${entry.name}`
+      if (path === beside) continue
       if (entry.isDirectory()) walk(path)
       else add(path)
     }

@@ -18,10 +18,9 @@ export async function serve({ port, dev = false, env, output = 'inherit' }) {
   track(child)
   const ended = new Promise((resolve) => child.once('exit', resolve))
   const address = `http://localhost:${port}`
-  const ready = await Promise.race([
-    untilAnswers(`http://127.0.0.1:${port}/sign-in`),
-    ended.then(() => false),
-  ])
+  const givingUp = new AbortController()
+  const ready = await Promise.race([untilAnswers(port, givingUp.signal), ended.then(() => false)])
+  givingUp.abort()
   if (!ready) {
     child.kill('SIGKILL')
     throw new Obstacle(`The web server did not start on ${address}.`)
