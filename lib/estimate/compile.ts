@@ -145,7 +145,8 @@ function emitGrid(
   sameOrder: (name: string, offset: number) => string,
 ): void {
   block.columns.forEach((column, index) => {
-    put(sheet, at.headerRow, index, label(column.title, 'heading'))
+    const note = column.source === undefined ? {} : { note: `Source: ${column.source}` }
+    put(sheet, at.headerRow, index, { ...label(column.title, 'heading'), ...note })
     if (column.named) {
       const { name, ...rest } = column.named
       define(name, { quantity: column.quantity, role: rest.role, label: rest.label })
@@ -225,7 +226,9 @@ function refer(
       if (reach === 'above') return `${letters}$${first - 1}:${letters}${row}`
       return `${letters}${row + 1}`
     })
-    .replace(/\{([a-z0-9_]+)\}/g, (_, name: string) => sameOrder(name, offset))
+    .replace(/\{([a-z0-9_]+)(?::(\d+))?\}/g, (_, name: string, index: string | undefined) =>
+      sameOrder(name, index === undefined ? offset : Number(index)),
+    )
 }
 
 const currencyMark = '¤'

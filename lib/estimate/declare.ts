@@ -7,7 +7,8 @@ import type { Ground } from '../workbook'
  *
  * In formulas a named value is written by its name, `[column title]` is the cell of that column in the same row,
  * (`[first:column title]` from the first row to this one, `[above:column title]` from the header to the row above),
- * and `{name}` is the cell of the column called `name`, anywhere, in the row of the same order.
+ * and `{name}` is the cell of the column called `name`, anywhere, in the row of the same order
+ * (`{name:3}` its fourth row).
  */
 export type Scalar = string | number | boolean
 
@@ -67,6 +68,7 @@ export interface HeadingLine {
   readonly kind: 'heading'
   readonly label: string
 }
+export type Severity = 'impossible' | 'error' | 'warning'
 /** A condition that should hold: "in order", or a sentence that says what is wrong. */
 export interface CheckLine {
   readonly kind: 'check'
@@ -75,7 +77,8 @@ export interface CheckLine {
   readonly formula: string
   /** The named value that a person would change to put it right. */
   readonly about: string
-  readonly severity: 'error' | 'warning'
+  /** An impossible house is refused; an error must be put right before work goes on; a warning is to be looked at. */
+  readonly severity: Severity
   readonly source: string
   readonly note?: string
 }
@@ -109,6 +112,8 @@ export interface GridColumn {
   readonly digits?: number
   readonly unit?: string
   readonly choices?: Choices
+  /** Where its formula or its figures come from; kept as a note on the header. */
+  readonly source?: string
   /** Names the column's cells from the first row to the last (the closing row included). */
   readonly named?: NameOfColumn
   /** What a row that is added by an override holds here when nothing is said. */

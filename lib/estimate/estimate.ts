@@ -43,7 +43,7 @@ export function estimate(json: unknown): Result<Estimate> {
   const read = reader(built.value, engine)
   for (const { name, about, severity } of templateChecks) {
     const says = read(name)[0]
-    if (severity === 'warning' || says === inOrder) continue
+    if (severity !== 'impossible' || says === inOrder) continue
     engine.destroy()
     const text = typeof says === 'string' ? says : 'expected a house that can be computed'
     return fail('invalid', `${about}: ${text.charAt(0).toLowerCase()}${text.slice(1)}.`, { name: about })
@@ -103,7 +103,7 @@ function reportOf(workbook: Workbook, read: Read, engine: Engine): EstimateRepor
   }
   for (const { name, about, severity } of templateChecks) {
     const says = read(name)[0]
-    if (severity === 'warning' && typeof says === 'string' && says !== inOrder) {
+    if (severity !== 'impossible' && typeof says === 'string' && says !== inOrder) {
       warnings.push({ name: about, message: says })
     }
   }

@@ -1,15 +1,20 @@
 import type { Quantity } from '../units'
-import type { Choices, GridRow, Limits, SheetDeclaration, Stated } from './declare'
+import type { Choices, GridRow, Limits, Severity, SheetDeclaration, Stated } from './declare'
 import { frame } from './sheets/frame'
 import { heat } from './sheets/heat'
 import { job } from './sheets/job'
+import { light } from './sheets/light'
 import { openings } from './sheets/openings'
+import { options } from './sheets/options'
 import { price } from './sheets/price'
 import { site } from './sheets/site'
+import { sun } from './sheets/sun'
 import { surfaces } from './sheets/surfaces'
 import { takeOff } from './sheets/take-off'
+import { weather } from './sheets/weather'
 import { coverings } from './tables/coverings'
 import { fuels } from './tables/fuels'
+import { crops, tightness } from './tables/reference'
 import { sheetsInStock } from './tables/sheets-in-stock'
 import { fixings, labour, profiles } from './tables/supplies'
 
@@ -21,7 +26,11 @@ export const steps = (given: readonly GridRow[] = []): readonly SheetDeclaration
   surfaces,
   openings(given),
   takeOff,
+  sun,
   heat,
+  light,
+  weather,
+  options,
   price,
 ]
 
@@ -33,6 +42,8 @@ export const tables: readonly SheetDeclaration[] = [
   fixings,
   labour,
   fuels,
+  crops,
+  tightness,
 ]
 
 /** What is known of an input before there is a workbook. */
@@ -84,7 +95,7 @@ export const templateInputs: readonly TemplateInput[] = steps().flatMap(inputsOf
 export interface TemplateCheck {
   readonly name: string
   readonly about: string
-  readonly severity: 'error' | 'warning'
+  readonly severity: Severity
 }
 
 export const templateChecks: readonly TemplateCheck[] = steps().flatMap((sheet) =>

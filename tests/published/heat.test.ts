@@ -1,7 +1,9 @@
-import { describe, expect, test } from 'vitest'
+import { describe, expect, test, vi } from 'vitest'
 import type { WorkbookRequest } from '@/lib/estimate'
 import { convert } from '@/lib/units'
 import { compute } from '../lib/estimate/compute'
+
+vi.setConfig({ testTimeout: 60_000 })
 
 /** Every row runs through the workbook's own formulas. Status: read, read-2, from memory, computed (see each source). */
 interface Check {

@@ -79,6 +79,24 @@ export const site: SheetDeclaration = {
         limits: { min: -60, max: 60, in: 'si' },
         source: demo,
       }),
+      input({
+        name: 'ground_snow_load',
+        label: 'Ground snow load',
+        quantity: 'pressure',
+        value: 30,
+        limits: { min: 0, max: 20, in: 'si' },
+        source: demo,
+        note: 'From the map of the local code.',
+      }),
+      input({
+        name: 'basic_wind_speed',
+        label: 'Basic wind speed',
+        quantity: 'speed',
+        value: 105,
+        limits: { min: 0, max: 120, in: 'si' },
+        source: demo,
+        note: 'Three-second gust, from the map of the local code.',
+      }),
     ),
     grid({
       columns: [

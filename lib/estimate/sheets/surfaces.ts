@@ -126,6 +126,12 @@ export const surfaces: SheetDeclaration = {
           formula: '=[Net area]*[U-value]',
           named: area('surface_conductance', 'conductances of the surfaces'),
         },
+        {
+          title: 'Without screen',
+          quantity: 'conductance',
+          formula: '=[Net area]/[Resistance]',
+          named: area('surface_day_conductance', 'conductances with the screen drawn back'),
+        },
       ],
       rows: [
         {
@@ -260,6 +266,13 @@ export const surfaces: SheetDeclaration = {
         total: true,
       }),
       computed({
+        name: 'day_conductance',
+        label: 'Conductance with the screen drawn back',
+        quantity: 'conductance',
+        formula: '=SUM(surface_day_conductance)+SUM(opening_conductance)',
+        source: 'ASABE EP406',
+      }),
+      computed({
         name: 'average_u_value',
         label: 'Average U-value',
         quantity: 'u-value',
@@ -271,7 +284,7 @@ export const surfaces: SheetDeclaration = {
         name: 'opening_fit_check',
         label: 'Openings fit their surface',
         about: 'opening_area',
-        severity: 'error',
+        severity: 'impossible',
         formula:
           '=IF(MIN(surface_net_area)<-0.000001,"Expected openings no larger than the surface that they are in","in order")',
         source: 'geometry',
@@ -281,7 +294,7 @@ export const surfaces: SheetDeclaration = {
         name: 'opening_surface_check',
         label: 'Openings name a surface',
         about: 'opening_area',
-        severity: 'error',
+        severity: 'impossible',
         formula:
           '=IF(ABS(opening_area-SUM(surface_opening_area))>0.000001,"Expected every opening to name a surface of this sheet","in order")',
         source: 'the workbook’s own',

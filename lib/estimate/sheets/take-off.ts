@@ -18,9 +18,20 @@ const whole = (quotient: string): string => `ROUNDUP(ROUND(${quotient},9),0)`
 const columns: readonly GridColumn[] = [
   { title: 'Surface', quantity: 'text', formula: '={surface_name}', width: 230 },
   { title: 'Covering', quantity: 'text', formula: '={surface_covering}', width: 130 },
-  { title: 'Part', quantity: 'text', formula: '={surface_part}' },
+  {
+    title: 'Part',
+    quantity: 'text',
+    formula: '={surface_part}',
+    named: area('take_off_part', 'parts of the house, in the take-off'),
+  },
   { title: 'Overhang', quantity: 'length', formula: '=0' },
   { title: 'Cut length', quantity: 'length', formula: '={surface_flute_length}-knee_wall_height' },
+  {
+    title: 'Piece',
+    quantity: 'length',
+    formula: '=[Cut length]+[Overhang]',
+    named: area('sheet_cut_length', 'longest piece of each surface'),
+  },
   {
     title: 'Area needed',
     quantity: 'area',
@@ -69,7 +80,7 @@ const columns: readonly GridColumn[] = [
   {
     title: 'Joints',
     quantity: 'length',
-    formula: `=IF(OR([Joint profile]="NONE",[Sheet width]=0,{surface_width}=0),0,(${whole('{surface_width}/[Sheet width]')}-1)*([Cut length]+[Overhang])*{surface_count})`,
+    formula: `=IF(OR([Joint profile]="NONE",[Sheet width]=0,{surface_width}=0),0,(${whole('{surface_width}/[Sheet width]')}-1)*[Piece]*{surface_count})`,
     named: area('needed_joints', 'joint lengths'),
   },
   { title: 'End profile', quantity: 'text', ground: 'table', formula: `=${of('end profile')}` },
@@ -83,7 +94,7 @@ const columns: readonly GridColumn[] = [
   {
     title: 'Fixings',
     quantity: 'count',
-    formula: `=IF(OR([Fixing]="NONE",[Area needed]=0),0,(${whole('([Cut length]+[Overhang])/purlin_spacing')}+1)*(${whole('{surface_width}/fixing_spacing')}+1)*{surface_count})`,
+    formula: `=IF(OR([Fixing]="NONE",[Area needed]=0),0,(${whole('[Piece]/purlin_spacing')}+1)*(${whole('{surface_width}/fixing_spacing')}+1)*{surface_count})`,
     named: area('needed_fixings', 'fixings'),
   },
   {
@@ -196,6 +207,13 @@ export const takeOff: SheetDeclaration = {
         formula: '=SUM(needed_area)',
         source: 'take-off',
         note: 'Overhang included.',
+      }),
+      computed({
+        name: 'roof_sheet_area',
+        label: 'Of it on the roof',
+        quantity: 'area',
+        formula: '=SUMIFS(needed_area,take_off_part,"roof")',
+        source: 'take-off',
       }),
       computed({
         name: 'sheet_area_bought',

@@ -28,6 +28,21 @@ export const coveringColumns: readonly GridColumn[] = [
     absent: 0,
     limits: { min: 0, max: 1e6, in: 'si' },
   },
+  {
+    title: 'span by stiffness',
+    quantity: 'length',
+    absent: 0,
+    limits: { min: 0, max: 100, in: 'si' },
+    source:
+      'span that 1 kPa bends by a twentieth of it; common practice, no source: the maker’s own load table comes first',
+  },
+  {
+    title: 'span by strength',
+    quantity: 'length',
+    absent: 0,
+    limits: { min: 0, max: 100, in: 'si' },
+    source: 'span that 1 kPa strains as far as it may; common practice, no source',
+  },
   { title: 'lowest service temperature', quantity: 'temperature' },
   { title: 'highest service temperature', quantity: 'temperature' },
   { title: 'life', quantity: 'years', limits: { above: 0, max: 200 } },
@@ -125,6 +140,30 @@ interface Product {
   readonly source: string
 }
 
+/** Spans in metres at 1 kPa; of film, the spacing of its bows. */
+const spans: Readonly<Record<string, number>> = {
+  'FILM-1': 1.5,
+  'FILM-1-IR': 1.5,
+  'FILM-2': 1.5,
+  'FILM-2-IR': 1.5,
+  'GLASS-1': 0.75,
+  'GLASS-2': 0.9,
+  'ACRYL-1': 0.4,
+  'ACRYL-TWIN-16': 1.3,
+  'PC-CORR': 1.05,
+  'PC-TWIN-3': 0.55,
+  'PC-TWIN-4': 0.65,
+  'PC-TWIN-6': 0.9,
+  'PC-TWIN-8': 1.1,
+  'PC-TWIN-10': 1.25,
+  'PC-TRIPLE-8': 1.15,
+  'PC-TRIPLE-10': 1.3,
+  'PC-TRIPLE-16': 1.7,
+  'PC-FIVE-25': 2.2,
+  'PANEL-50': 2.4,
+}
+const strengthOverStiffness = 1.25
+
 function covering(code: string, description: string, of: Family, it: Product): GridRow {
   return {
     code,
@@ -141,6 +180,8 @@ function covering(code: string, description: string, of: Family, it: Product): G
     'expansion coefficient': si(of.expansion),
     bending: it.bending,
     'minimum bend radius': si(it.bend),
+    'span by stiffness': si(spans[code] ?? 0),
+    'span by strength': si((spans[code] ?? 0) * strengthOverStiffness),
     'lowest service temperature': si(of.coldest),
     'highest service temperature': si(of.hottest),
     life: of.life,

@@ -1,8 +1,10 @@
-import { describe, expect, test } from 'vitest'
-import { estimateNames, inOrder, templateInputs } from '@/lib/estimate'
+import { describe, expect, test, vi } from 'vitest'
+import { estimateNames, inOrder, templateChecks, templateInputs } from '@/lib/estimate'
 import { readCommandLine } from '@/lib/estimate/command-line'
 import { type EstimateReport, estimate } from '@/lib/estimate/estimate'
 import { parseStrictJson } from '@/lib/estimate/strict-json'
+
+vi.setConfig({ testTimeout: 60_000 })
 
 function report(json: unknown): EstimateReport {
   const made = estimate(json)
@@ -34,10 +36,14 @@ describe('the estimate of a request', () => {
     expect(blank.values.fuel_price).toEqual({ value: 1.3, unit: 'USD/therm' })
   })
 
-  test('the blank template stands in order', () => {
-    for (const [name, { value }] of Object.entries(blank.values)) {
-      if (name.endsWith('_check')) expect(value, name).toBe(inOrder)
+  test('[G4] the blank template has no error; its warnings are those that its checks say', () => {
+    for (const { name, severity } of templateChecks) {
+      if (severity !== 'warning') expect(blank.values[name]?.value, name).toBe(inOrder)
     }
+    const said = templateChecks.filter(({ name }) => blank.values[name]?.value !== inOrder)
+    expect(blank.warnings).toEqual(
+      said.map(({ name, about }) => ({ name: about, message: blank.values[name]?.value })),
+    )
   })
 
   test('strings carry any unit of the kind', () => {
