@@ -13,7 +13,8 @@ export function changeWords(context: CommandContext, { before, after, quantity }
 }
 
 /** "−24,310", "+$2,184", "same": without the unit, which the heading gives. */
-export function differenceWords(context: CommandContext, change: Change | undefined): string {
+export function differenceWords(context: CommandContext, change: Change | 'same' | undefined): string {
+  if (change === 'same') return 'same'
   if (!change || typeof change.before !== 'number' || typeof change.after !== 'number') return '–'
   const difference = change.after - change.before
   const shown = formatQuantity(Math.abs(difference), change.quantity, context.system, {

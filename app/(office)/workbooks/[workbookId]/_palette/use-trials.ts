@@ -24,7 +24,8 @@ export interface Trials {
   readonly changes: readonly Change[] | undefined
   readonly waiting: boolean
   readonly columns: readonly { readonly name: string; readonly label: string; readonly unit: string }[]
-  readonly changeOf: (option: ArgumentOption, name: string) => Change | undefined
+  /** `same` when it was tried and the figure stays; undefined while that is unknown. */
+  readonly changeOf: (option: ArgumentOption, name: string) => Change | 'same' | undefined
 }
 
 /** Tries out the selected line, and beside it the options that are seen. */
@@ -44,7 +45,8 @@ export function useTrials(palette: PaletteState, { context, tryOut }: PalettePro
       const { stage } = palette
       if (stage.kind === 'find') return undefined
       const args = { ...stage.args, [stage.spec.id]: option.value }
-      return answers.get(keyOf(stage.command, args))?.find((change) => change.name === name)
+      const answer = answers.get(keyOf(stage.command, args))
+      return answer && (answer.find((change) => change.name === name) ?? 'same')
     },
   }
 }
