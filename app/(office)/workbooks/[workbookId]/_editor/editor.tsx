@@ -25,7 +25,10 @@ import { useSession, useView } from './use-session'
 import { useWorkbooks } from './use-workbooks'
 import { EditorView } from './view-state'
 
-const SheetGrid = dynamic(() => import('../_grid/sheet-grid'), { ssr: false, loading: GridWaiting })
+const loadGrid = () => import('../_grid/sheet-grid')
+const SheetGrid = dynamic(loadGrid, { ssr: false, loading: GridWaiting })
+// The grid is wanted in any case, so its code is asked for together with this.
+void loadGrid()
 
 /** The open workbook: steps, tally, the sheet, the entry line, and the palette over them. */
 export function Editor({ session }: { readonly session: Session }) {

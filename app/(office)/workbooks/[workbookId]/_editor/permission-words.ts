@@ -6,5 +6,5 @@ export function lockWords(session: WorkbookSession, sheet: Sheet): string | unde
   if (!session.may.change) return 'You can read this workbook but not change it.'
   if (sheet.lock === undefined || session.may.changeLocked) return undefined
   const why = sheet.lock.trim().replace(/\.$/, '')
-  return why === '' ? 'Locked: a manager can change it.' : `Locked (${why}): a manager can change it.`
+  return why === '' ? 'Locked: a manager can change it.' : `${why}.`
 }

@@ -18,7 +18,7 @@ export function SheetHead({ session, sheet }: { readonly session: WorkbookSessio
           {locked}
         </p>
       ) : null}
-      <div className="ml-auto self-center max-lg:ml-0 max-lg:basis-full">
+      <div className="ml-auto self-center max-xl:ml-0 max-xl:basis-full">
         <Legend />
       </div>
     </header>

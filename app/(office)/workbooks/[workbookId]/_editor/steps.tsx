@@ -5,6 +5,7 @@ import { type KeyboardEvent, useRef } from 'react'
 import { Brand } from '@/app/_ui/mark'
 import { keyCaps, type Platform } from '@/lib/commands'
 import type { Sheet } from '@/lib/workbook'
+import { lockWords } from './permission-words'
 import type { WorkbookSession } from './session-contract'
 import type { StepState } from './step-state'
 import { useSession, useView } from './use-session'
@@ -61,7 +62,7 @@ export function Steps({ session, view, platform, onPalette }: Props) {
         {tables.length > 0 ? (
           <>
             <h2 className="mt-3 mb-1 px-4 font-normal text-[0.8125rem] text-quiet" id="tables-title">
-              Tables
+              {tables.every((sheet) => lockWords(session, sheet)) ? 'Tables, locked' : 'Tables'}
             </h2>
             <ul className="m-0 list-none p-0" aria-labelledby="tables-title">
               {tables.map((sheet) => entry(sheet, undefined))}
@@ -118,21 +119,13 @@ function StepEntry({
           {number}
         </span>
         <span className="min-w-0 flex-1 truncate">{sheet.name}</span>
-        <StepMark state={state} table={number === undefined} locked={sheet.lock !== undefined} />
+        <StepMark state={state} table={number === undefined} />
       </button>
     </li>
   )
 }
 
-function StepMark({
-  state,
-  table,
-  locked,
-}: {
-  readonly state: StepState | undefined
-  readonly table: boolean
-  readonly locked: boolean
-}) {
+function StepMark({ state, table }: { readonly state: StepState | undefined; readonly table: boolean }) {
   if (state && state.toLookAt > 0) {
     return (
       <span className="figure text-[0.75rem] font-semibold text-clay">
@@ -142,8 +135,7 @@ function StepMark({
       </span>
     )
   }
-  if (table) return locked ? <span className="text-[0.75rem] font-normal text-quiet">locked</span> : null
-  if (!state?.filled) return null
+  if (table || !state?.filled) return null
   return (
     <span className="text-[0.75rem] text-moss">
       <span aria-hidden="true">✓</span>

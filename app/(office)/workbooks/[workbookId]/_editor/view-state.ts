@@ -85,11 +85,11 @@ export function extentOf(sheet: Sheet, page = 12): Extent {
   return { firstRow: 1, lastRow: Math.max(1, rows - 1), lastColumn: sheet.columns.length - 1, page }
 }
 
-/** The first input of the sheet, where the work on it begins; else the first cell below the header. */
+/** The first input among the first columns, where the work on the sheet begins; else the first cell below the header. */
 function firstSelection(sheet: Sheet): CellSelection {
   for (let row = 1; row < Math.min(sheet.rowCount, 200); row += 1) {
     const column = sheet.rows[row]?.findIndex((cell) => cell?.ground === 'input') ?? -1
-    if (column >= 0) return single(row, column)
+    if (column >= 0 && column <= 2) return single(row, column)
   }
   return single(1, 0)
 }

@@ -1,5 +1,5 @@
 import type { TextCell, Theme } from '@glideapps/glide-data-grid'
-import type { UnitSystem } from '@/lib/units'
+import { formatQuantity, isMoney, type Quantity, type UnitSystem, unitOf } from '@/lib/units'
 import {
   type Cell,
   type CellFormat,
@@ -100,12 +100,35 @@ export function gridCell(
   }
 }
 
+/** The value as its cell prints it; the unit is left to the column's heading, or to the cell beside it, where they say it. */
 export function shownText(source: CellSource, row: number, column: number): string {
-  const cell = source.sheet.rows[row]?.[column]
-  return displayText(
-    source.value(row, column),
-    formatOf(source.sheet, cell, column),
-    source.system,
-    source.currency,
+  const { sheet, system, currency } = source
+  const format = formatOf(sheet, sheet.rows[row]?.[column], column)
+  const value = source.value(row, column)
+  const { quantity, digits } = format
+  if (typeof value !== 'number' || quantity === undefined || !unitStandsBeside(source, row, column, format)) {
+    return displayText(value, format, system, currency)
+  }
+  return formatQuantity(value, quantity, system, {
+    unit: false,
+    ...(digits === undefined ? {} : { digits }),
+    ...(currency === undefined ? {} : { currency }),
+  })
+}
+
+function unitStandsBeside(source: CellSource, row: number, column: number, format: CellFormat): boolean {
+  const { quantity } = format
+  if (quantity === undefined || quantity === 'angle') return false
+  if (quantity === source.sheet.columns[column]?.quantity) return format.unit === undefined
+  const beside = source.value(row, column + 1)
+  return (
+    typeof beside === 'string' &&
+    beside === (format.unit ?? unitSymbol(quantity, source.system, source.currency))
   )
+}
+
+/** As it is printed beside a number or above a column; money has its sign at the number already. */
+export function unitSymbol(quantity: Quantity, system: UnitSystem, currency: string | undefined): string {
+  const { symbol } = unitOf(quantity, system, currency)
+  return isMoney(quantity) && currency !== undefined ? symbol.slice(currency.length) : symbol
 }

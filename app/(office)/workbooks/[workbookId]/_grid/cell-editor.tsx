@@ -27,8 +27,8 @@ export function CellEditor(props: CellEditorProps) {
   const { edit, bounds, choices, onText, onCommit, onCancel } = props
   const input = useRef<HTMLTextAreaElement>(null)
   const id = useId()
-  const [chosen, setChosen] = useState(-1)
   const listed = useListed(choices, edit)
+  const [chosen, setChosen] = useState(() => matching(listed, edit.text))
   const done = useRef(false)
 
   useLayoutEffect(() => {
@@ -62,11 +62,19 @@ export function CellEditor(props: CellEditorProps) {
     }
   }, [])
 
+  // biome-ignore lint/correctness/useExhaustiveDependencies: typing chooses anew; the arrow keys go on from there
+  useEffect(() => setChosen(matching(listed, edit.text)), [edit.text])
+
   const below = bounds.y + bounds.height
   return (
     <div
       className="fixed z-30"
-      style={{ left: bounds.x - 1, top: bounds.y - 1, minWidth: bounds.width + 2, maxWidth: '32rem' }}
+      style={{
+        left: bounds.x - 1,
+        top: bounds.y - 1,
+        width: 'max-content',
+        maxWidth: `calc(100vw - ${bounds.x + 8}px)`,
+      }}
     >
       <textarea
         ref={input}
@@ -79,10 +87,14 @@ export function CellEditor(props: CellEditorProps) {
         aria-invalid={edit.error ? true : undefined}
         aria-describedby={edit.error ? `${id}-error` : undefined}
         {...(choices ? combobox(id, listed.length > 0, chosen) : {})}
-        className={`cell-input block w-full resize-none border-2 bg-raised px-2 text-[13px] text-ink leading-5 shadow-lift outline-none ${edit.error ? 'border-ember' : 'border-clay'} ${props.right ? 'figure text-right' : ''}`}
-        style={{ minHeight: bounds.height + 2, paddingBlock: (bounds.height - 22) / 2 }}
+        className={`block resize-none [field-sizing:content] border-2 bg-raised px-2 text-[13px] text-ink leading-5 shadow-lift outline-none ${edit.error ? 'border-ember' : 'border-clay'} ${props.right ? 'figure text-right' : ''}`}
+        style={{
+          minHeight: bounds.height + 2,
+          minWidth: bounds.width + 2,
+          maxWidth: `min(40rem, calc(100vw - ${bounds.x + 8}px))`,
+          paddingBlock: (bounds.height - 22) / 2,
+        }}
         onChange={(event) => {
-          setChosen(-1)
           onText(event.target.value)
         }}
         onKeyDown={onKeyDown}
@@ -95,7 +107,7 @@ export function CellEditor(props: CellEditorProps) {
         <p
           id={`${id}-error`}
           role="alert"
-          className="mt-1 max-w-xs rounded-soft border border-ember bg-raised px-2.5 py-1.5 text-[0.8125rem] text-ember shadow-lift"
+          className="absolute mt-1 w-max max-w-xs rounded-soft border border-ember bg-raised px-2.5 py-1.5 text-[0.8125rem] text-ember shadow-lift"
         >
           <span aria-hidden="true">! </span>
           {edit.error}
@@ -143,7 +155,7 @@ function Choices({
       id={`${id}-choices`}
       role="listbox"
       aria-label="Choices"
-      className="mt-1 max-h-64 min-w-60 overflow-y-auto rounded-soft border border-line bg-raised py-1 shadow-lift"
+      className="absolute mt-1 w-max min-w-60 max-w-[min(36rem,90vw)] overflow-y-auto rounded-soft border border-line bg-raised py-1 shadow-lift"
       style={{ maxHeight: `min(16rem, calc(100dvh - ${below + 16}px))` }}
     >
       {listed.map((choice, i) => (
@@ -161,9 +173,11 @@ function Choices({
             onPick(choice.value)
           }}
         >
-          <span>{choice.title}</span>
-          {choice.title === choice.value ? null : <span className="figure text-quiet">{choice.value}</span>}
-          {choice.detail ? <span className="ml-auto text-quiet">{choice.detail}</span> : null}
+          <span className="whitespace-nowrap">{choice.title}</span>
+          {choice.title === choice.value ? null : (
+            <span className="figure whitespace-nowrap text-quiet">{choice.value}</span>
+          )}
+          {choice.detail ? <span className="ml-auto truncate pl-4 text-quiet">{choice.detail}</span> : null}
         </div>
       ))}
     </div>
@@ -179,6 +193,14 @@ function useListed(choices: readonly Choice[] | undefined, edit: EditState): rea
   return choices.filter(
     ({ value, title }) => value.toLowerCase().includes(typed) || title.toLowerCase().includes(typed),
   )
+}
+
+/** The choice that the text is, else the first of those that it leaves; none while nothing is typed. */
+function matching(listed: readonly Choice[], text: string): number {
+  const typed = text.trim().toLowerCase()
+  if (typed === '') return -1
+  const exact = listed.findIndex(({ value }) => value.toLowerCase() === typed)
+  return exact >= 0 ? exact : Math.min(0, listed.length - 1)
 }
 
 function insertAtCaret(element: HTMLTextAreaElement, text: string, onText: (text: string) => void): void {

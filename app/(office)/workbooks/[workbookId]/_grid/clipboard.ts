@@ -1,5 +1,5 @@
 import { fail, type Result, succeed } from '@/lib/failures'
-import { type CellPatch, limits, type Operation, parseTsv, type Sheet, toTsv } from '@/lib/workbook'
+import { type CellPatch, cellName, limits, type Operation, parseTsv, type Sheet, toTsv } from '@/lib/workbook'
 import type { CellSource } from './cell-content'
 import { shownText } from './cell-content'
 import { clearPatch, type EntryContext, readEntry } from './entry'
@@ -44,13 +44,19 @@ export function pasteOperations(
       const row = target.row + r
       const column = target.column + c
       const read = readEntry(context, typed, row, column)
-      if (!read.ok) return read
+      if (!read.ok)
+        return fail(
+          read.failure.code,
+          `${cellName(row, column)} refused ${quoted(typed)}: ${read.failure.text}`,
+        )
       cells.push(read.value)
     }
   }
   if (cells.length === 0) return fail('invalid', 'There is nothing to paste.')
   return succeed({ operations: writeOperations(context.sheet, cells), area: target })
 }
+
+const quoted = (text: string) => `“${text.length > 24 ? `${text.slice(0, 24)}…` : text}”`
 
 function fits(sheet: Sheet, area: Rectangle): Result<void> {
   const size = area.rowCount * area.columnCount

@@ -1,25 +1,40 @@
 import type { SizedGridColumn } from '@glideapps/glide-data-grid'
-import { isNumeric } from '@/lib/units'
+import { isNumeric, type Quantity } from '@/lib/units'
 import { type CellValue, columnName, isCellError, type Sheet } from '@/lib/workbook'
-import { standsRight } from './cell-content'
+import { type CellSource, shownText, standsRight, unitSymbol } from './cell-content'
 import type { ColumnHead } from './draw'
 
-const usualWidth = 112
-const looked = 24
+const narrowest = 72
+const widest = 260
+const looked = 60
+/** Of a character at 13 px, about. */
+const characterWidth = 7.8
 
 type ReadCell = (row: number, column: number) => CellValue
 
 /** Headers from the first row of the sheet; a column of numbers has its title at the right. */
-export function columnHeads(sheet: Sheet, value: ReadCell): ColumnHead[] {
-  return sheet.columns.map((_, column) => {
+export function columnHeads({ sheet, system, currency, value }: CellSource): ColumnHead[] {
+  return sheet.columns.map(({ quantity }, column) => {
     const title = value(0, column)
     return {
       letters: columnName(column),
       title: title === null || isCellError(title) ? '' : String(title),
+      unit: quantity === undefined || unitless.has(quantity) ? '' : unitSymbol(quantity, system, currency),
       right: isRight(sheet, column, value),
     }
   })
 }
+
+/** Printed with the number itself, or not a unit. */
+const unitless: ReadonlySet<Quantity> = new Set([
+  'ratio',
+  'angle',
+  'text',
+  'boolean',
+  'date',
+  'number',
+  'count',
+])
 
 function isRight(sheet: Sheet, column: number, value: ReadCell): boolean {
   const quantity = sheet.columns[column]?.quantity
@@ -35,14 +50,33 @@ function isRight(sheet: Sheet, column: number, value: ReadCell): boolean {
   return right > left
 }
 
+/** Widths for columns that have none: as their first rows need. Never less than in `before`, so that nothing jumps. */
+export function fittingWidths(
+  source: CellSource,
+  heads: readonly ColumnHead[],
+  before: readonly number[] = [],
+): number[] {
+  const { sheet } = source
+  return heads.map((head, column) => {
+    let longest = Math.max(head.title.length, head.letters.length + head.unit.length + 1)
+    for (let row = 1; row < Math.min(sheet.rowCount, looked); row += 1) {
+      if (sheet.rows[row]?.[column]?.input === undefined) continue
+      longest = Math.max(longest, shownText(source, row, column).length)
+    }
+    const width = Math.min(widest, Math.max(narrowest, Math.ceil(longest * characterWidth) + 20))
+    return Math.max(width, before[column] ?? 0)
+  })
+}
+
 export function gridColumns(
   sheet: Sheet,
   heads: readonly ColumnHead[],
+  fitting: readonly number[],
   resized: ReadonlyMap<number, number>,
 ): SizedGridColumn[] {
   return heads.map((head, column) => ({
     id: `${sheet.id} ${column}`,
     title: head.title === '' ? head.letters : `${head.letters} ${head.title}`,
-    width: resized.get(column) ?? sheet.columns[column]?.width ?? usualWidth,
+    width: resized.get(column) ?? sheet.columns[column]?.width ?? fitting[column] ?? narrowest,
   }))
 }

@@ -9,6 +9,8 @@ export const rowHeight = 28
 export interface ColumnHead {
   readonly letters: string
   readonly title: string
+  /** Of the numbers in the column, when they share one. */
+  readonly unit: string
   readonly right: boolean
 }
 
@@ -25,6 +27,13 @@ export function headerDrawer(heads: readonly ColumnHead[], colours: Colours): Dr
     ctx.font = `11px ${mono}`
     ctx.fillStyle = hasSelectedCell ? colours.clay : colours.quiet
     ctx.fillText(head.letters, x, rect.y + 17)
+    if (head.unit !== '') {
+      const beside = 8 + head.letters.length * 7
+      ctx.fillStyle = colours.quiet
+      ctx.font = `11px ${sans}`
+      const unit = shortened(ctx, head.unit, rect.width - 18 - beside)
+      ctx.fillText(unit, right ? x - beside : x + beside, rect.y + 17)
+    }
     ctx.font = `600 13px ${sans}`
     ctx.fillStyle = colours.ink
     ctx.fillText(shortened(ctx, head.title, rect.width - 18), x, rect.y + 34)
@@ -46,13 +55,43 @@ function shortened(ctx: CanvasRenderingContext2D, text: string, width: number): 
 /** A mark beside the colour of a ground, so that the colour never says it alone. */
 export function cellDrawer(
   markOf: (column: number, row: number) => Mark | undefined,
+  isActive: (column: number, row: number) => boolean,
   colours: Colours,
 ): DrawCellCallback {
-  return ({ ctx, rect, col, row }, drawContent) => {
-    drawContent()
+  return ({ ctx, rect, col, row, cell }, drawContent) => {
+    if (cell.kind === 'text' && cell.contentAlign === 'right' && !roomFor(cell.displayData, rect.width)) {
+      drawTooNarrow(ctx, rect, colours)
+    } else drawContent()
     const mark = markOf(col, row)
     if (mark) drawMark(ctx, rect, mark, colours)
+    if (isActive(col, row)) {
+      ctx.strokeStyle = colours.clay
+      ctx.lineWidth = 2
+      ctx.strokeRect(rect.x + 1.5, rect.y + 1.5, rect.width - 2, rect.height - 2)
+    }
   }
+}
+
+/** Of a digit at 13 px in the fixed-width font, whose digits are all alike. */
+const digitWidth = 7.8
+
+function roomFor(text: string, width: number): boolean {
+  return text.length * digitWidth <= width - 6
+}
+
+/** A number cut off at the left would read as another number, so it is not shown at all. */
+function drawTooNarrow(ctx: CanvasRenderingContext2D, rect: Rectangle, colours: Colours): void {
+  ctx.save()
+  ctx.fillStyle = colours.quiet
+  ctx.font = `13px ${sans}`
+  ctx.textAlign = 'right'
+  ctx.textBaseline = 'middle'
+  ctx.fillText(
+    'too narrow'.length * 6 < rect.width - 12 ? 'too narrow' : '⋯',
+    rect.x + rect.width - 9,
+    rect.y + rect.height / 2,
+  )
+  ctx.restore()
 }
 
 /** The same marks as in the legend: a corner for inputs, two lines for table values, a dot for overrides. */

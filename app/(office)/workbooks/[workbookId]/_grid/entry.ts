@@ -1,10 +1,9 @@
-import { fail, type Result, succeed } from '@/lib/failures'
+import { type Result, succeed } from '@/lib/failures'
 import type { UnitSystem } from '@/lib/units'
 import {
   type Cell,
   type CellInput,
   type CellPatch,
-  cellName,
   editText,
   isFormula,
   parseEntry,
@@ -26,7 +25,7 @@ export function openingText({ sheet, system }: EntryContext, row: number, column
   return editText(cell?.input, formatOf(sheet, cell, column), system)
 }
 
-/** What was typed into a cell, as a change of that cell; the failure says where and what was expected. */
+/** What was typed into a cell, as a change of that cell; the failure says what was expected. */
 export function readEntry(
   context: EntryContext,
   text: string,
@@ -42,7 +41,7 @@ export function readEntry(
     context.currency,
     context.choices?.(row, column),
   )
-  if (!read.ok) return fail(read.failure.code, `${cellName(row, column)}: ${lowerFirst(read.failure.text)}`)
+  if (!read.ok) return read
   const input = read.value
   if (input === null || input === undefined) return succeed(clearPatch(row, column))
   const ground = groundAfter(cell, input)
@@ -58,8 +57,4 @@ function groundAfter(cell: Cell | undefined, input: CellInput): Cell['ground'] {
   if (cell?.ground === 'table') return 'override'
   if (cell?.ground === undefined && isFormula(cell?.input) && !isFormula(input)) return 'override'
   return cell?.ground
-}
-
-function lowerFirst(text: string): string {
-  return /^[A-Z][a-z]/.test(text) ? text.slice(0, 1).toLowerCase() + text.slice(1) : text
 }

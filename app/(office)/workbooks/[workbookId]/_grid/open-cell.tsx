@@ -2,10 +2,12 @@
 
 import type { DataEditorRef } from '@glideapps/glide-data-grid'
 import { type RefObject, useLayoutEffect, useState } from 'react'
+import { isNumeric } from '@/lib/units'
 import { cellName, type Sheet } from '@/lib/workbook'
 import type { WorkbookSession } from '../_editor/session-contract'
 import { useView } from '../_editor/use-session'
 import type { EditorView } from '../_editor/view-state'
+import { formatOf } from './cell-content'
 import { CellEditor, type CellEditorProps } from './cell-editor'
 import { cellChoices } from './choices'
 import type { ColumnHead } from './draw'
@@ -41,11 +43,17 @@ export function OpenCell({ session, view, editing, sheet, grid, scrolled, heads 
       edit={open}
       bounds={bounds}
       label={`${cellName(open.row, open.column)} ${head?.title ?? ''}`.trim()}
-      right={head?.right ?? false}
+      right={writtenRight(sheet, open.row, open.column)}
       choices={cellChoices(session, sheet, open.row, open.column)}
       onText={(text) => editing.retype(text)}
       onCommit={(text, { axis, by }) => editing.commit(text, axis, by)}
       onCancel={() => editing.cancel()}
     />
   )
+}
+
+/** A cell of a quantity is written as it will stand: numbers at the right. */
+function writtenRight(sheet: Sheet, row: number, column: number): boolean {
+  const { quantity, choices } = formatOf(sheet, sheet.rows[row]?.[column], column)
+  return quantity !== undefined && choices === undefined && isNumeric(quantity)
 }

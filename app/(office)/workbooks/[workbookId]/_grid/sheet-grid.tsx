@@ -30,7 +30,8 @@ import { type Colours, gridTheme, mono } from './palette-colours'
 import { SelectedCellWords } from './selected-cell-words'
 import { moved } from './selection'
 import { useChangedCells } from './use-changed-cells'
-import { useColumnWidths } from './use-column-widths'
+import { useColumnWidths, useFittingWidths } from './use-column-widths'
+import { useWideScreen } from './use-wide-screen'
 
 export interface SheetGridProps {
   readonly session: WorkbookSession
@@ -53,6 +54,7 @@ export default function SheetGrid(props: SheetGridProps) {
   const settled = useChangedCells(session, sheet.id, grid, visible)
   const { widths, onColumnResize, onColumnResizeEnd } = useColumnWidths(session, sheet)
   const readonly = lockWords(session, sheet) !== undefined
+  const wide = useWideScreen()
   const extent = extentOf(sheet, Math.max(1, visible.current.height - 2))
 
   const themes = useMemo(() => new CellThemes(colours), [colours])
@@ -68,8 +70,9 @@ export default function SheetGrid(props: SheetGridProps) {
     }),
     [session, sheet, shape, settled],
   )
-  const heads = useMemo(() => columnHeads(sheet, source.value), [sheet, source])
-  const columns = useMemo(() => gridColumns(sheet, heads, widths), [sheet, heads, widths])
+  const heads = useMemo(() => columnHeads(source), [source])
+  const fitting = useFittingWidths(source, heads)
+  const columns = useMemo(() => gridColumns(sheet, heads, fitting, widths), [sheet, heads, fitting, widths])
   const getCellContent = useCallback(
     ([column, row]: Item) => gridCell(source, row + 1, column, themes, readonly),
     [source, themes, readonly],
@@ -77,11 +80,18 @@ export default function SheetGrid(props: SheetGridProps) {
   const drawHeader = useMemo(() => headerDrawer(heads, colours), [heads, colours])
   const drawCell = useMemo(
     () =>
-      cellDrawer((column, row) => {
-        const cell = sheet.rows[row + 1]?.[column]
-        return cell && { ground: groundOf(cell), note: cell.note !== undefined }
-      }, colours),
-    [sheet, colours],
+      cellDrawer(
+        (column, row) => {
+          const cell = sheet.rows[row + 1]?.[column]
+          return cell && { ground: groundOf(cell), note: cell.note !== undefined }
+        },
+        (column, row) => {
+          const { active } = view.snapshot().selection
+          return active.column === column && active.row === row + 1
+        },
+        colours,
+      ),
+    [sheet, view, colours],
   )
   const gridSelection = useMemo(() => toGrid(selection), [selection])
 
@@ -162,7 +172,7 @@ export default function SheetGrid(props: SheetGridProps) {
           }}
           onColumnResize={onColumnResize}
           onColumnResizeEnd={onColumnResizeEnd}
-          freezeColumns={sheet.columns.length > 1 ? 1 : 0}
+          freezeColumns={wide && sheet.columns.length > 1 ? 1 : 0}
           rowMarkers={{
             kind: 'clickable-number',
             startIndex: 2,

@@ -1,9 +1,12 @@
 import type { GridColumn } from '@glideapps/glide-data-grid'
-import { useEffect, useState } from 'react'
+import { useEffect, useMemo, useRef, useState } from 'react'
 import type { Sheet } from '@/lib/workbook'
 import { lockWords } from '../_editor/permission-words'
 import type { WorkbookSession } from '../_editor/session-contract'
 import { useSession } from '../_editor/use-session'
+import type { CellSource } from './cell-content'
+import { fittingWidths } from './columns'
+import type { ColumnHead } from './draw'
 
 /** Widths while the border of a column is dragged; letting go saves them, where this person may. */
 export function useColumnWidths(session: WorkbookSession, sheet: Sheet) {
@@ -25,4 +28,14 @@ export function useColumnWidths(session: WorkbookSession, sheet: Sheet) {
       ])
     },
   }
+}
+
+/** Widths that fit; kept from one reading of the values to the next, and begun anew when the columns change. */
+export function useFittingWidths(source: CellSource, heads: readonly ColumnHead[]): readonly number[] {
+  const before = useRef<readonly number[]>([])
+  return useMemo(() => {
+    const kept = before.current.length === heads.length ? before.current : []
+    before.current = fittingWidths(source, heads, kept)
+    return before.current
+  }, [source, heads])
 }

@@ -44,11 +44,11 @@ function TallyFigure({
   readonly difference: Difference | undefined
 }) {
   return (
-    <div className="min-w-36 flex-1 border-line border-l px-4 pt-2.5 pb-2 first:border-l-0 lg:min-w-40">
-      <dt className="truncate text-[0.8125rem] text-quiet">{reading.label}</dt>
+    <div className="min-w-36 flex-1 border-line border-l px-4 pt-2 pb-1.5 first:border-l-0 lg:min-w-40">
+      <dt className="truncate text-[0.8125rem] text-quiet leading-5">{reading.label}</dt>
       <dd className="m-0">
         <span
-          className="figure text-[1.375rem] leading-7"
+          className="figure font-medium text-[1.375rem] leading-7"
           title={reading.error}
           data-name={reading.name}
           data-value={reading.value}
@@ -59,7 +59,7 @@ function TallyFigure({
           <span className="ml-1.5 whitespace-nowrap text-[0.8125rem] text-quiet">{reading.unit}</span>
         )}
         <span
-          className={`figure block h-5 text-[0.8125rem] transition-opacity duration-700 ${tone(difference)} ${difference ? 'opacity-100' : 'opacity-0'}`}
+          className={`figure block h-4 text-[0.8125rem] leading-4 transition-opacity duration-700 ${tone(difference)} ${difference ? 'opacity-100' : 'opacity-0'}`}
         >
           {difference ? (
             <>
