@@ -2,7 +2,17 @@ import type { Area } from './model'
 
 /** Addresses as people write them: columns by letters, rows from 1. Indexes in code are from 0. */
 
+const names: string[] = []
+
 export function columnName(column: number): string {
+  const known = names[column]
+  if (known !== undefined) return known
+  const made = makeColumnName(column)
+  if (column < 1000) names[column] = made
+  return made
+}
+
+function makeColumnName(column: number): string {
   let name = ''
   for (let rest = column; rest >= 0; rest = Math.floor(rest / 26) - 1) {
     name = String.fromCharCode(65 + (rest % 26)) + name

@@ -47,6 +47,7 @@ export function spanAfter(change: LineChange, [first, last]: Span): Span | undef
     }
     case 'move': {
       const place = landing(change)
+      if (place === at) return [first, last]
       if (first >= at && last < at + count) return [first - at + place, last - at + place]
       const closed = spanAfter({ kind: 'remove', at, count }, [first, last])
       return closed && spanAfter({ kind: 'insert', at: place, count }, closed)

@@ -43,22 +43,36 @@ export function shiftFormula(
 /** Whether undoing the change brings a reference back as typed (`a1`, `A01` and `A1 : B2` would not come back so). */
 function comesBack(
   text: string,
-  { first, last, start, end, shape, sheet }: Reference,
+  reference: Reference,
   axis: Axis,
   change: LineChange,
   back: LineChange,
   replacement: string | undefined,
 ): boolean {
-  const low = Math.min(first[axis], last[axis])
-  const high = Math.max(first[axis], last[axis])
-  if (low < 0) return true
-  const span = shape === 'cell' ? cellSpan(change, low) : spanAfter(change, [low, high])
-  const returned = span && (shape === 'cell' ? cellSpan(back, span[0]) : spanAfter(back, span))
-  if (returned?.[0] !== low || returned[1] !== high) return false
-  if (replacement === undefined) return true
-  const written = shape === 'cell' ? endText(first) : `${endText(first)}:${endText(last)}`
-  const typed = text.slice(start, end)
-  return sheet === undefined ? typed === written : typed.endsWith(`!${written}`)
+  const { first, last, shape } = reference
+  // What an insertion shifts or stretches, the removal of the same lines always brings back.
+  if (change.kind !== 'insert' && first[axis] >= 0) {
+    const low = Math.min(first[axis], last[axis])
+    const high = Math.max(first[axis], last[axis])
+    const span = shape === 'cell' ? cellSpan(change, low) : spanAfter(change, [low, high])
+    const returned = span && (shape === 'cell' ? cellSpan(back, span[0]) : spanAfter(back, span))
+    if (returned?.[0] !== low || returned[1] !== high) return false
+  }
+  return replacement === undefined || isWrittenPlainly(text, reference)
+}
+
+/** Capital letters, no spaces, no leading zeros, the sheet named once: as references are written here. */
+function isWrittenPlainly(text: string, { start, end, sheet }: Reference): boolean {
+  let at = sheet === undefined ? start : text.indexOf('!', start + sheet.length) + 1
+  for (let before = 0; at < end; at += 1) {
+    const code = text.charCodeAt(at)
+    const digit = code >= 48 && code <= 57
+    const capital = code >= 65 && code <= 90
+    if (!digit && !capital && code !== 36 && code !== 58) return false
+    if (code === 48 && !(before >= 48 && before <= 57)) return false
+    before = code
+  }
+  return true
 }
 
 function cellSpan(change: LineChange, line: number): Span | undefined {
@@ -67,7 +81,7 @@ function cellSpan(change: LineChange, line: number): Span | undefined {
 }
 
 export function renameInFormula(text: string, from: string, to: string): string {
-  if (!text.includes('!')) return text
+  if (from === to || !text.includes('!')) return text
   return rewrite(text, (reference) => {
     if (reference.sheet === undefined || !same(reference.sheet, from)) return undefined
     return write(to, reference.shape, reference.first, reference.last)

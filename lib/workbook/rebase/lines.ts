@@ -54,6 +54,7 @@ export function gapAfter(change: LineChange, gap: number, side: Side): number {
       return gap <= at ? gap : gap < at + count ? at : gap - count
     case 'move': {
       const place = landing(change)
+      if (place === at) return gap
       if (gap > at && gap < at + count) return gap - at + place
       const closed = gap <= at ? gap : gap - count
       return closed > place || (closed === place && side === 'second') ? closed + count : closed

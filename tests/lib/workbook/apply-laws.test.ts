@@ -1,7 +1,10 @@
 import fc from 'fast-check'
-import { describe, expect, test } from 'vitest'
+import { describe, expect, test, vi } from 'vitest'
 import { applyAll, applyOperation, fromJson, operationSchema, toJson } from '@/lib/workbook'
 import { operation, workbook } from './arbitrary'
+
+// Laws run many cases, on machines that do other work too.
+vi.setConfig({ testTimeout: 60_000 })
 
 describe('laws of operations', () => {
   test('[W2 W4 W12 W16] an operation and then its inverse restore the workbook exactly', () => {

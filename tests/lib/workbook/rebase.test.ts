@@ -1,5 +1,5 @@
 import fc from 'fast-check'
-import { describe, expect, test } from 'vitest'
+import { describe, expect, test, vi } from 'vitest'
 import {
   applyOperation,
   fromJson,
@@ -11,6 +11,9 @@ import {
   type WorkbookJson,
 } from '@/lib/workbook'
 import { lineOperation, operation, setCellsOperation, sheetOperation, workbook } from './arbitrary'
+
+// Laws run many cases, on machines that do other work too.
+vi.setConfig({ testTimeout: 60_000 })
 
 const sheets = [
   { id: 'frame', name: 'Frame' },

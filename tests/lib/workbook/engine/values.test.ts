@@ -124,10 +124,10 @@ describe('errors in words', () => {
     const engine = createEngine(bookJson({ Frame: inputs }))
     const started = performance.now()
     const { errors } = engine.all()
-    expect(performance.now() - started).toBeLessThan(3000)
+    expect(performance.now() - started).toBeLessThan(10_000)
     expect(errors).toHaveLength(5000)
     expect(errors[0]?.error).toBe('#CYCLE!')
-  })
+  }, 30_000)
 
   test.each([
     '=A#&A#',
