@@ -293,6 +293,15 @@ export const heat: SheetDeclaration = {
         note: 'Without sun: the base stands for it.',
       }),
       computed({
+        name: 'degree_day_fuel_quantity',
+        label: 'Fuel by degree-days',
+        quantity: 'number',
+        digits: 0,
+        unit: `=${lookUp('fuels', 'fuel', 'unit')}`,
+        formula: '=degree_day_heat/(fuel_heating_value*heater_efficiency)',
+        source: 'definition',
+      }),
+      computed({
         name: 'degree_day_difference',
         label: 'Against the monthly balance',
         quantity: 'ratio',

@@ -134,6 +134,7 @@ const optionColumns: readonly GridColumn[] = [
     formula:
       '=[First cost]*IF(discount_rate=0,[Times renewed],(1-(1+discount_rate)^-([Times renewed]*[Life]))/((1+discount_rate)^[Life]-1))',
     source: `${handbook}: present value of each renewal`,
+    named: area('option_renewals', 'renewals of each option, today'),
   },
   {
     title: 'Heat today',

@@ -18,9 +18,24 @@ export const sunColumns: readonly GridColumn[] = [
     named: area('sun_part', 'whether the row is of the roof'),
   },
   { title: 'Month', quantity: 'text', ground: 'label', named: area('sun_month', 'month of the row') },
-  { title: 'Always', quantity: 'number', digits: 4 },
-  { title: 'With noon', quantity: 'number', digits: 4 },
-  { title: 'With evening', quantity: 'number', digits: 4 },
+  {
+    title: 'Always',
+    quantity: 'number',
+    digits: 4,
+    named: area('sun_always', 'cosine of incidence, the part without the hour'),
+  },
+  {
+    title: 'With noon',
+    quantity: 'number',
+    digits: 4,
+    named: area('sun_noon', 'the part with the cosine of the hour angle'),
+  },
+  {
+    title: 'With evening',
+    quantity: 'number',
+    digits: 4,
+    named: area('sun_evening', 'the part with its sine'),
+  },
   { title: 'Swing', quantity: 'number', digits: 4, formula: '=SQRT([With noon]^2+[With evening]^2)' },
   {
     title: 'Best hour',
