@@ -1,4 +1,5 @@
 import type { TestProject } from 'vitest/node'
+import { ensureBuilt } from '@/db/server/build.mjs'
 import { joinSharedCluster } from './shared-cluster'
 import { startSite } from './site-server'
 
@@ -13,6 +14,7 @@ declare module 'vitest' {
 export default async function setup(project: TestProject): Promise<() => Promise<void>> {
   const { release, ...cluster } = await joinSharedCluster()
   try {
+    await ensureBuilt()
     const site = await startSite(cluster, 'browser')
     project.provide('siteAddress', site.address)
     process.env.TEST_CLUSTER = JSON.stringify(cluster)

@@ -2,7 +2,6 @@ import { spawnSync } from 'node:child_process'
 import { randomBytes } from 'node:crypto'
 import { closeSync, mkdirSync, openSync } from 'node:fs'
 import { join } from 'node:path'
-import { ensureBuilt } from '@/db/server/build.mjs'
 import { freePort } from '@/db/server/ports.mjs'
 import { root } from '@/db/server/project.mjs'
 import { serve } from '@/db/server/serve.mjs'
@@ -11,38 +10,43 @@ import { type ClonedDatabase, cloneDatabase, type TestCluster } from './test-clu
 export interface Site {
   readonly address: string
   readonly database: ClonedDatabase
-  /** The web server's process. */
-  readonly process: number
+  /** Kills the web server with SIGKILL, and starts another on the same database and secret. */
+  killAndServeAgain(): Promise<Site>
   stop(): Promise<void>
 }
 
-/** The built application on a free port with a seeded database of its own. Its log is in `.data/test-logs`. */
+/**
+ * The application as the set-up of the `browser` project built it, on a free port, with a seeded database of its own.
+ * Its log is in `.data/test-logs`.
+ */
 export async function startSite(cluster: TestCluster, name: string): Promise<Site> {
-  await ensureBuilt()
   const database = await cloneDatabase(cluster)
   try {
     seed(database)
-    return await serveSite(database, name)
+    return await serveSite(database, name, randomBytes(32).toString('base64url'))
   } catch (error) {
     await database.drop()
     throw error
   }
 }
 
-async function serveSite(database: ClonedDatabase, name: string): Promise<Site> {
+async function serveSite(database: ClonedDatabase, name: string, secret: string): Promise<Site> {
   const folder = join(root, '.data/test-logs')
   mkdirSync(folder, { recursive: true })
-  const output = openSync(join(folder, `${name}.log`), 'w')
+  const output = openSync(join(folder, `${name}.log`), 'a')
   const server = await serve({
     port: await freePort(33_000),
-    env: { APP_DATABASE_URL: database.appUrl, AUTH_SECRET: randomBytes(32).toString('base64url') },
+    env: { APP_DATABASE_URL: database.appUrl, AUTH_SECRET: secret },
     output,
   }).finally(() => closeSync(output))
-  if (server.child.pid === undefined) throw new Error('the web server has no process number')
   return {
     address: server.address,
     database,
-    process: server.child.pid,
+    killAndServeAgain: async () => {
+      server.child.kill('SIGKILL')
+      await server.ended
+      return serveSite(database, name, secret)
+    },
     stop: async () => {
       await server.stop()
       await database.drop()
