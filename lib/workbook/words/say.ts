@@ -20,8 +20,9 @@ const operatorWords: Readonly<Record<Operator, string>> = {
 }
 
 /**
- * A formula in words, made from its references and the names and titles around them: "net area × U-value".
- * Undefined when the text is no formula that can be read so.
+ * A formula in words: "net area × U-value".
+ * F1 They are made from its references and the names and titles around them; nothing is written by hand.
+ * F2 Undefined when the text is no formula that can be read so.
  */
 export function sayFormula(workbook: Workbook, at: CellAddress, formula: string): string | undefined {
   const tree = parseFormula(formula)

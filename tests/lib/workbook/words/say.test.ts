@@ -84,11 +84,11 @@ describe('formula in words', () => {
     ['=Gone!A1', 'a sheet that is not there'],
     ['=#REF!+1', 'a broken reference + 1'],
     ['=UNHEARD(B2)', 'UNHEARD of net area'],
-  ])('[W20] %s is said as: %s', (formula, words) => {
+  ])('[F1] %s is said as: %s', (formula, words) => {
     expect(sayFormula(workbook, at, formula)).toBe(words)
   })
 
-  it.each(['=', '=1+', '=(1', '=SUM(1', '=1)', '={1,2}', '=1 2'])('[W21] %s is not said', (formula) => {
+  it.each(['=', '=1+', '=(1', '=SUM(1', '=1)', '={1,2}', '=1 2'])('[F2] %s is not said', (formula) => {
     expect(sayFormula(workbook, at, formula)).toBeUndefined()
   })
 })
