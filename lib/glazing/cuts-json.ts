@@ -1,4 +1,4 @@
-import type { Layout } from './layout/lay-out-house'
+import type { Layout } from './layout/layout'
 
 /** A layout as other programs read it: lengths in `length_unit`, names and shape as documented for `--cuts`. */
 export function toCutsJson(layout: Layout) {

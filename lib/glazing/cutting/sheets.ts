@@ -1,4 +1,5 @@
 import { fail, type Result, succeed } from '../../failures'
+import { arrange, type Level, slantedKerf } from './arrange'
 import { relax } from './column-generation'
 import type { SolveIntegerProgram } from './exact'
 import type { CuttingProblem } from './problem'
@@ -19,13 +20,6 @@ export interface SheetStock {
   readonly length: number
   readonly price: number
   readonly available?: number
-}
-
-/** Pieces side by side across a sheet, ripped from one crosscut length. */
-export interface Level {
-  readonly length: number
-  readonly width: number
-  readonly pieces: readonly string[]
 }
 
 export interface CutSheet {
@@ -51,7 +45,6 @@ interface Draft {
 /**
  * C10 Two stages: a sheet is crosscut into levels, a level ripped into pieces; pieces keep their length along the flutes
  * and are at most turned half round.
- * C11 Two pieces of the same width and slope out of one sheet share the slanted cut: low + low + rise + kerf.
  * C12 The bound holds for every plan of this kind: where no two pieces fit side by side it is that of the lengths;
  * otherwise that of areas, with pieces wider than a share of the sheet counted as if they took its whole width.
  * All stock is of one width. Errors: `invalid` when a piece fits no sheet, `limit` when the stock does not suffice.
@@ -89,10 +82,11 @@ export function cutSheets(
   const { drafts } = best
   const sheets = plan.value.bars.map((bar): CutSheet => {
     const price = cheapestOf(stock, bar.stock)
-    const levels = (bar.marks ?? []).flatMap((mark) => {
+    const groups = (bar.marks ?? []).flatMap((mark) => {
       const draft = drafts[Number(mark)]
-      return draft ? [{ ...draft, pieces: draft.pieces.map((piece) => piece.mark) }] : []
+      return draft ? [draft.pieces] : []
     })
+    const levels = arrange(groups, kerf, (piece) => nestOf(piece, kerf)?.slope)
     return { length: bar.stock, price, levels, offcut: bar.offcut }
   })
   const { cost } = plan.value
@@ -154,7 +148,7 @@ function problemOf(drafts: readonly Draft[], stock: readonly SheetStock[], kerf:
 /** The rise is saved, less what the slanted cut takes more than a square one. */
 function nestOf({ width, rise }: SheetPiece, kerf: number) {
   if (rise === undefined || rise === 0) return undefined
-  const saving = Math.abs(rise) - kerf * (Math.hypot(width, rise) / width - 1)
+  const saving = Math.abs(rise) - (slantedKerf(width, rise, kerf) - kerf)
   return saving > 0 ? { slope: `${width}:${rise}`, saving } : undefined
 }
 

@@ -30,12 +30,13 @@ export function solveCutting(
 
   const available = instance.stock.map((option) => option.available)
   const many = instance.demands.reduce((sum, count) => sum + count, 0)
-  let best = constructive(instance, instance.demands, available, many > 2_000 ? 0 : 8)
+  let best = constructive(instance, instance.demands, available, 0)
   const relaxation = relax(instance)
-  best = cheaper(instance, best, roundRelaxation(instance, relaxation, many > 2_000 ? 4 : 24))
   let bound = stepUp(instance, relaxation.bound)
+  const done = () => best !== undefined && costOf(instance, best) <= bound + slack(bound)
+  if (!done()) best = cheaper(instance, best, roundRelaxation(instance, relaxation, many > 2_000 ? 4 : 24))
 
-  if (integerProgram && (!best || costOf(instance, best) > bound + slack(bound))) {
+  if (integerProgram && !done()) {
     const all = maximalPatterns(instance, 4_000)
     const patterns = all ?? relaxation.pool
     const solved = integerProgram(coveringProgram(instance, patterns))

@@ -30,6 +30,33 @@ export function within(region: Region, box: Rectangle, tolerance: number): Regio
   return regions(clipping.intersection(rings(region), [ring(rectangle(box))]), tolerance)
 }
 
+/**
+ * The upright strip of an outline that has one height range at every u, as all surfaces have: cut along two lines,
+ * which leaves one region.
+ */
+export function stripOf(outline: Polygon, from: number, to: number, tolerance: number): Region[] {
+  const { left, right, bottom, top } = boundsOf(outline)
+  const [u, width] = [Math.max(left, from), Math.min(right, to) - Math.max(left, from)]
+  if (width <= tolerance) return []
+  if (isUprightRectangle(outline))
+    return [{ outline: rectangle({ u, v: bottom, width, height: top - bottom }), holes: [] }]
+  const cut = keepBeside(keepBeside(outline, from, 1), to, -1)
+  return cut.length < 3 ? [] : [{ outline: cut, holes: [] }]
+}
+
+function keepBeside(outline: Polygon, line: number, side: 1 | -1): Polygon {
+  const kept: Point[] = []
+  let before = outline.at(-1)
+  for (const point of outline) {
+    const [a, b] = [side * ((before ?? point)[0] - line), side * (point[0] - line)]
+    if (before && ((a < 0 && b > 0) || (a > 0 && b < 0)))
+      kept.push([line, before[1] + (a / (a - b)) * (point[1] - before[1])])
+    if (b >= 0) kept.push(point)
+    before = point
+  }
+  return kept
+}
+
 /** What is left of `region` without the rectangles. */
 export function without(region: Region, cuts: readonly Rectangle[], tolerance: number): Region[] {
   const { left, right, bottom, top } = boundsOf(region.outline)

@@ -47,11 +47,16 @@ export function edgesOf(polygon: Polygon): [from: Point, to: Point][] {
 
 /** The heights between which the polygon stands at `u`, edges included; undefined beside it. */
 export function heightsAt(polygon: Polygon, u: number, tolerance = 0): readonly [number, number] | undefined {
-  let [low, high] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY]
-  for (const [[u1, v1], [u2, v2]] of edgesOf(polygon)) {
+  let low = Number.POSITIVE_INFINITY
+  let high = Number.NEGATIVE_INFINITY
+  let from = polygon.at(-1)
+  for (const to of polygon) {
+    const [u1, v1] = from ?? to
+    const [u2, v2] = to
+    from = to
     if (u < Math.min(u1, u2) - tolerance || u > Math.max(u1, u2) + tolerance) continue
     const span = u2 - u1
-    if (Math.abs(span) <= tolerance || span === 0) {
+    if (Math.abs(span) <= tolerance) {
       low = Math.min(low, v1, v2)
       high = Math.max(high, v1, v2)
       continue

@@ -1,4 +1,4 @@
-import { type Region, within, without } from '../geometry/clip'
+import { type Region, stripOf, within, without } from '../geometry/clip'
 import { boundsOf, heightsAt, type Polygon, type Rectangle } from '../geometry/polygon'
 
 /** What one piece covers, up to joint centre lines, and where its sides meet neighbours. */
@@ -25,13 +25,12 @@ export function panelsOf(surface: Polygon, openings: readonly Rectangle[], how: 
   const { left, right, bottom, top } = boundsOf(surface)
   const tolerance = 1e-9 * Math.max(1, right - left, top - bottom)
   const edges = [left, ...how.joints, right]
-  const whole: Region = { outline: surface, holes: [] }
   const panels: Panel[] = []
   const jambs = new Set<number>()
   const splices = new Set<number>()
   for (let i = 1; i < edges.length; i += 1) {
     const [from, to] = [edges[i - 1] ?? left, edges[i] ?? right]
-    const strip = within(whole, { u: from, v: bottom, width: to - from, height: top - bottom }, tolerance)
+    const strip = stripOf(surface, from, to, tolerance)
     for (const part of strip) {
       const reach = boundsOf(part.outline)
       const cuts = how.splices(reach.bottom, reach.top)

@@ -67,7 +67,7 @@ export function layOutSurface(
       const joints = jointLines(left, right, pitch, start, rules.narrowestStrip)
       if (!lines.some((other) => same(other.joints, joints))) lines.push({ start, joints })
     }
-  let best: SurfaceLayout | undefined
+  let best: Omit<SurfaceLayout, 'runs'> | undefined
   for (const { start, joints } of lines)
     for (const splicing of house.splicing ? [house.splicing] : splicings) {
       let spliced = false
@@ -80,16 +80,16 @@ export function layOutSurface(
       }
       const panels = panelsOf(surface.polygon, openings, { joints, splices, narrowest: rules.narrowestStrip })
       const laid = panels.map((panel) => layOutPanel(panel, surface.polygon, covering, house, rules))
-      const runs = runsOf(laid)
       const sheets = costOfPanels(laid, covering, choice, rules)
       if (!sheets.ok) return sheets
       const jointPrice = covering.jointProfile?.price ?? 0
-      const cost = sheets.value + jointPrice * lengthOf(runs, 'joint')
-      if (!best || cost < best.cost - 1e-9) best = { start, splicing, joints, panels: laid, runs, cost }
+      const beside = laid.reduce((sum, one) => sum + (one.rightJoint ? one.size.right : 0), 0)
+      const cost = sheets.value + jointPrice * beside
+      if (!best || cost < best.cost - 1e-9) best = { start, splicing, joints, panels: laid, cost }
       if (!spliced) break
     }
   if (!best) throw new Error('a surface without a layout')
-  return succeed(best)
+  return succeed({ ...best, runs: runsOf(best.panels) })
 }
 
 function limitsOf(
@@ -140,10 +140,6 @@ function costOfPanels(
 export function sheetPiece({ size }: LaidPanel, mark: string): SheetPiece {
   const { width, length, rise } = size
   return rise === undefined ? { mark, width, length } : { mark, width, length, rise }
-}
-
-export function lengthOf(runs: readonly Run[], kind: Run['kind']): number {
-  return runs.reduce((sum, run) => (run.kind === kind ? sum + run.length : sum), 0)
 }
 
 function same(a: readonly number[], b: readonly number[]): boolean {

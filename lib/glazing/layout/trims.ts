@@ -67,7 +67,7 @@ function shared(first: readonly Interval[], second: readonly Interval[], slack: 
   const rest = (one: Interval, others: readonly Interval[], keep: boolean): Interval[] => {
     let left = [one]
     for (const other of others) {
-      if (Math.abs(other.line - one.line) > slack) continue
+      if (Math.abs(other.line - one.line) > slack || other.from >= one.to || other.to <= one.from) continue
       left = left.flatMap((part) => {
         const [from, to] = [Math.max(part.from, other.from), Math.min(part.to, other.to)]
         if (to - from <= slack) return [part]
@@ -80,10 +80,27 @@ function shared(first: readonly Interval[], second: readonly Interval[], slack: 
     }
     return left
   }
+  const [near, nearToo] = [byLine(second, slack), byLine(first, slack)]
   return {
     both,
-    first: first.flatMap((one) => rest(one, second, true)),
-    second: second.flatMap((one) => rest(one, first, false)),
+    first: first.flatMap((one) => rest(one, near(one.line), true)),
+    second: second.flatMap((one) => rest(one, nearToo(one.line), false)),
+  }
+}
+
+/** Finds the intervals about a line without looking at all of them. */
+function byLine(intervals: readonly Interval[], slack: number): (line: number) => readonly Interval[] {
+  const width = 1e3 * slack
+  const found = new Map<number, Interval[]>()
+  for (const one of intervals) {
+    const key = Math.round(one.line / width)
+    const list = found.get(key)
+    if (list) list.push(one)
+    else found.set(key, [one])
+  }
+  return (line) => {
+    const key = Math.round(line / width)
+    return [key - 1, key, key + 1].flatMap((k) => found.get(k) ?? [])
   }
 }
 
