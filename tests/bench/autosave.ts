@@ -1,6 +1,7 @@
 import { apiOf, newWorkbook } from './api'
 import { signIn, startBenchApp } from './bench-app'
 import { launchChromium } from './chromium'
+import { withCleanup } from './cleanup'
 import { buildEmptyApp } from './empty-app'
 import type { Say } from './main'
 import { startNext } from './next-server'
@@ -11,11 +12,14 @@ const warmUp = 50
 const requests = 400
 
 /** One edit saved over HTTP against a route that parses the same body and answers, without a database, by turns. */
-export async function run(say: Say): Promise<Line[]> {
-  const empty = await startNext(await buildEmptyApp())
-  const app = await startBenchApp('autosave')
-  const browser = await launchChromium()
-  try {
+export function run(say: Say): Promise<Line[]> {
+  return withCleanup(async (later) => {
+    const empty = await startNext(await buildEmptyApp())
+    later(empty.stop)
+    const app = await startBenchApp('autosave')
+    later(app.stop)
+    const browser = await launchChromium()
+    later(() => browser.close())
     const api = await apiOf(await signIn(browser, app), app)
     await browser.close()
     const { id } = await newWorkbook(api, 'Autosave')
@@ -46,10 +50,7 @@ export async function run(say: Say): Promise<Line[]> {
         raw: `p50 / p95: app ${words('app')}, empty route ${words('empty')}`,
       },
     ]
-  } finally {
-    await browser.close()
-    await Promise.all([app.stop(), empty.stop()])
-  }
+  })
 }
 
 /** The width of the seeded frame, a little more each time. */

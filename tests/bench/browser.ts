@@ -6,6 +6,7 @@ import { weighFirstLoad } from './browser-first-load'
 import { measureOpening } from './browser-opening'
 import { measureScroll } from './browser-scroll'
 import { launchChromium } from './chromium'
+import { withCleanup } from './cleanup'
 import { buildEmptyApp } from './empty-app'
 import { generatedSizes, generateWorkbook } from './generated-workbook'
 import type { Say } from './main'
@@ -33,11 +34,14 @@ export interface Uploaded {
 }
 
 /** The whole product in Chromium, against an empty page and against HyperFormula alone in the same Chromium. */
-export async function run(say: Say): Promise<Line[]> {
-  const empty = await startNext(await buildEmptyApp())
-  const app = await startBenchApp('browser')
-  const browser = await launchChromium()
-  try {
+export function run(say: Say): Promise<Line[]> {
+  return withCleanup(async (later) => {
+    const empty = await startNext(await buildEmptyApp())
+    later(empty.stop)
+    const app = await startBenchApp('browser')
+    later(app.stop)
+    const browser = await launchChromium()
+    later(() => browser.close())
     const context = await signIn(browser, app)
     await addProbe(context)
     const bench: Bench = { app, empty, browser, context, api: await apiOf(context, app) }
@@ -60,8 +64,5 @@ export async function run(say: Say): Promise<Line[]> {
     }
     lines.push(...(await measureScroll(bench, largest)))
     return lines
-  } finally {
-    await browser.close()
-    await Promise.all([app.stop(), empty.stop()])
-  }
+  })
 }

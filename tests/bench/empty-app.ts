@@ -1,5 +1,6 @@
-import { spawn } from 'node:child_process'
-import { cpSync, mkdirSync, rmSync, writeFileSync } from 'node:fs'
+import { execFileSync, spawn } from 'node:child_process'
+import { createHash } from 'node:crypto'
+import { cpSync, existsSync, mkdirSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
 import { dirname, join } from 'node:path'
 import { fileURLToPath } from 'node:url'
 
@@ -8,31 +9,69 @@ export const projectRoot = fileURLToPath(new URL('../../', import.meta.url)).rep
 /** Everything the benchmarks write goes here; it is ignored by git and may be deleted. */
 export const benchFolder = join(projectRoot, '.data', 'bench')
 
+/** What the route's check of the body is made of, in lib. */
+const copied = ['failures.ts', 'units', 'workbook']
+
 /**
  * The least that a Next application can be, built with this project's own packages: a page with one client
  * component, and a route that parses the body of an append and answers, without a database. Gives its folder.
  */
 export async function buildEmptyApp(): Promise<string> {
   const folder = join(benchFolder, 'empty-app')
+  const stamp = join(folder, '.next', 'built-from')
+  const inputs = hashOfInputs()
+  if (existsSync(stamp) && readFileSync(stamp, 'utf8') === inputs) return folder
   rmSync(folder, { recursive: true, force: true })
   for (const [path, text] of Object.entries(files)) {
     mkdirSync(dirname(join(folder, path)), { recursive: true })
     writeFileSync(join(folder, path), text)
   }
-  // Copied, so that nothing of the empty application resolves to a setting of this one.
-  for (const part of ['failures.ts', 'units', 'workbook']) {
+  // Copied and linked, with the folder as the root of all that is looked for: the build would otherwise take the proxy
+  // and the instrumentation of this project, which it finds in a folder above.
+  for (const part of copied) {
     cpSync(join(projectRoot, 'lib', part), join(folder, 'lib', part), { recursive: true })
   }
+  for (const name of withDependencies(['next', 'react', 'react-dom', 'zod'])) {
+    mkdirSync(dirname(join(folder, 'node_modules', name)), { recursive: true })
+    execFileSync('cp', ['-al', join(projectRoot, 'node_modules', name), join(folder, 'node_modules', name)])
+  }
   await buildNext(folder)
+  writeFileSync(stamp, inputs)
   return folder
 }
 
+function hashOfInputs(): string {
+  const hash = createHash('sha256').update(JSON.stringify(files))
+  hash.update(readFileSync(join(projectRoot, 'package-lock.json')))
+  for (const part of copied) {
+    const path = join(projectRoot, 'lib', part)
+    const inside = part.includes('.') ? [''] : readdirSync(path, { recursive: true, encoding: 'utf8' }).sort()
+    for (const name of inside) if (/\.ts$/.test(join(path, name))) hash.update(readFileSync(join(path, name)))
+  }
+  return hash.digest('hex')
+}
+
+/** The packages and all that they need, where they are installed. */
+function withDependencies(names: readonly string[], found = new Set<string>()): Set<string> {
+  for (const name of names) {
+    const file = join(projectRoot, 'node_modules', name, 'package.json')
+    if (found.has(name) || !existsSync(file)) continue
+    found.add(name)
+    const { dependencies, optionalDependencies } = JSON.parse(readFileSync(file, 'utf8')) as {
+      readonly dependencies?: object
+      readonly optionalDependencies?: object
+    }
+    withDependencies(Object.keys({ ...dependencies, ...optionalDependencies }), found)
+  }
+  return found
+}
+
 /** `next build` in a folder of this project; throws with its output when it fails. */
-export function buildNext(folder: string, env: Record<string, string> = {}): Promise<void> {
+export function buildNext(folder: string): Promise<void> {
   return new Promise((resolve, reject) => {
-    const child = spawn(process.execPath, [nextBin, 'build', folder], {
+    const child = spawn(process.execPath, [nextProgram(folder), 'build', folder], {
       cwd: folder,
-      env: { ...process.env, ...env, NEXT_TELEMETRY_DISABLED: '1', NODE_ENV: 'production' },
+      env: { ...process.env, NEXT_TELEMETRY_DISABLED: '1', NODE_ENV: 'production' },
     })
     let output = ''
     for (const stream of [child.stdout, child.stderr]) {
@@ -45,10 +84,12 @@ export function buildNext(folder: string, env: Record<string, string> = {}): Pro
   })
 }
 
-export const nextBin = join(projectRoot, 'node_modules', 'next', 'dist', 'bin', 'next')
+export function nextProgram(folder: string): string {
+  return join(folder, 'node_modules/next/dist/bin/next')
+}
 
 const files: Record<string, string> = {
-  'next.config.mjs': `export default { turbopack: { root: ${JSON.stringify(projectRoot)} }, poweredByHeader: false, typescript: { ignoreBuildErrors: true } }\n`,
+  'next.config.mjs': `export default { turbopack: { root: import.meta.dirname }, poweredByHeader: false, typescript: { ignoreBuildErrors: true } }\n`,
   'tsconfig.json': '{ "compilerOptions": { "jsx": "react-jsx" }, "include": ["**/*.ts"] }\n',
   'app/layout.jsx':
     'export const metadata = { title: \'Empty\' }\nexport default function Layout({ children }) {\n  return <html lang="en"><body>{children}</body></html>\n}\n',

@@ -7,11 +7,11 @@ import { median, minimum } from './statistics'
 import type { EditKind } from './subject'
 import type { SubjectName } from './subjects'
 
-const rounds = 5
+const rounds = 4
 const names: readonly SubjectName[] = ['seeded', ...generatedSizes]
 
 /**
- * The app's engine (mirror, recalculation, packing of the changes) against HyperFormula alone, in processes by turns.
+ * The app's engine (mirror, recalculation, packing of the changes) against HyperFormula alone, in processes by turns, processor time.
  * Rounds go over all workbooks, so that what else the machine does for a while hits one round of each.
  */
 export async function run(say: Say): Promise<Line[]> {

@@ -7,7 +7,7 @@ import { median, minimum } from './statistics'
 const rounds = 5
 const size = 50_000
 
-/** The exported file against exceljs's own streaming writer with the same cells and no style, in processes by turns. */
+/** The exported file against exceljs's own streaming writer with the same cells and no style, in processes by turns, processor time. */
 export async function run(say: Say): Promise<Line[]> {
   const raw: ExportTimes[] = []
   const app: ExportTimes[] = []

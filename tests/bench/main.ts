@@ -1,3 +1,4 @@
+import { cpus, loadavg } from 'node:os'
 import { type Line, printLines } from './report'
 
 /** Loaded only when they run: a section that is not asked for costs nothing. */
@@ -33,8 +34,14 @@ async function main(): Promise<void> {
     console.error(`[${name}] ${((performance.now() - started) / 1000).toFixed(0)} s`)
   }
   console.log('')
+  if (busy()) console.log('Other programs kept this machine busy: take the times below with care.\n')
   printLines(lines)
   process.exit(broken ? 1 : 0)
+}
+
+/** More programs wanted a processor over the last minutes than there are, the benchmark's own two among them. */
+function busy(): boolean {
+  return (loadavg()[1] ?? 0) > cpus().length + 1
 }
 
 void main()

@@ -1,6 +1,6 @@
 import { type ChildProcess, spawn } from 'node:child_process'
 import { createServer } from 'node:net'
-import { nextBin } from './empty-app'
+import { nextProgram } from './empty-app'
 
 /** One `next start` that the benchmark owns. `address` is its origin, without a slash at the end. */
 export interface Server {
@@ -22,13 +22,17 @@ export function freePort(): Promise<number> {
   })
 }
 
-export async function startNext(folder: string, env: Record<string, string> = {}): Promise<Server> {
+export async function startNext(folder: string): Promise<Server> {
   const port = await freePort()
-  const child = spawn(process.execPath, [nextBin, 'start', folder, '-p', String(port), '-H', '127.0.0.1'], {
-    cwd: folder,
-    env: { ...process.env, NODE_ENV: 'production', NEXT_TELEMETRY_DISABLED: '1', ...env },
-    stdio: ['ignore', 'pipe', 'pipe'],
-  })
+  const child = spawn(
+    process.execPath,
+    [nextProgram(folder), 'start', folder, '-p', String(port), '-H', '127.0.0.1'],
+    {
+      cwd: folder,
+      env: { ...process.env, NODE_ENV: 'production', NEXT_TELEMETRY_DISABLED: '1' },
+      stdio: ['ignore', 'pipe', 'pipe'],
+    },
+  )
   let output = ''
   for (const stream of [child.stdout, child.stderr]) {
     stream.on('data', (data: Buffer) => {
