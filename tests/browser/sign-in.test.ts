@@ -14,13 +14,11 @@ const people = [
     who: role as string,
     email: demoFirm.emails[role],
     password: demoFirm.password as string,
-    sees: demoFirm.emails[role] as string,
   })),
   {
     who: 'another firm’s owner',
     email: otherFirm.emails.owner,
     password: otherFirm.password,
-    sees: otherFirm.workbook.title,
   },
 ]
 
@@ -86,13 +84,15 @@ describe('the sign-in form, without scripts', () => {
 })
 
 describe('pages', () => {
-  test.each(['/workbooks', `/workbooks/${otherFirm.workbook.id}`, '/'])(
+  test.each(['/workbooks', `/workbooks/${otherFirm.workbook.id}`])(
     '%s sends nobody to sign in, also past the proxy',
     async (path) => {
       for (const headers of [{}, { 'x-middleware-subrequest': 'proxy:proxy:proxy:proxy:proxy' }]) {
         const response = await fetch(siteAddress() + path, { headers, redirect: 'manual' })
-        expect([302, 303, 307, 308]).toContain(response.status)
-        expect(await response.text()).not.toContain(otherFirm.workbook.title)
+        const text = await response.text()
+        // A page that streams has sent its first bytes by then; the redirect is in the rest.
+        expect(response.headers.get('location') ?? text).toContain('/sign-in?next=')
+        expect(text).not.toContain(otherFirm.workbook.title)
       }
     },
   )
