@@ -164,6 +164,9 @@ export interface SheetDeclaration {
 export const lines = (...list: readonly Line[]): LinesBlock => ({ kind: 'lines', lines: list })
 export const grid = (block: Omit<GridBlock, 'kind'>): GridBlock => ({ kind: 'grid', ...block })
 
+/** Names a column for the formulas of other sheets; such names are areas, not values to be read one by one. */
+export const area = (name: string, label: string): NameOfColumn => ({ name, label, role: 'table' })
+
 /** Why tables cannot be changed in a workbook. */
 export const tableLock = 'Pinned from the price tables; a manager keeps them.'
 

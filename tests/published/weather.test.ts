@@ -40,14 +40,15 @@ describe('snow and wind: preliminary screens', () => {
     expect(us.number('roof_slope_factor')).toBeCloseTo(0.908, 3)
     expect(Math.abs(us.number('sloped_roof_snow_load') - 19)).toBeLessThanOrEqual(1)
   })
-  test.each([
+  const slopes: readonly [string, number, boolean, number, number, string][] = [
     ['SW4', 1, true, 30, 0.6154, 'ASCE 7 fig. 7.4-1; read-2'],
     ['SW4', 1, true, 50, 0.3077, 'ASCE 7 fig. 7.4-1; read-2'],
     ['SW5', 1.2, true, 10, 1, 'ASCE 7 fig. 7.4-1; read-2'],
     ['SW5', 1.2, true, 30, 0.7273, 'ASCE 7 fig. 7.4-1; read-2'],
     ['SW6', 1, false, 45, 0.625, 'ASCE 7 fig. 7.4-1; from memory'],
     ['SW6', 1.2, false, 60, 0.4, 'ASCE 7 fig. 7.4-1; from memory'],
-  ] as const)('%s: Ct %d, slippery %s, %d° is %d (%s)', (_, thermal, slippery, degrees, expected) => {
+  ]
+  test.each(slopes)('%s: Ct %d, slippery %s, %d° is %d (%s)', (_, thermal, slippery, degrees, expected) => {
     us.set({ ...gable(degrees), snow_thermal_factor: thermal, roof_is_slippery: slippery })
     expect(Math.abs(us.number('roof_slope_factor') - expected)).toBeLessThanOrEqual(1e-4)
   })

@@ -1,7 +1,6 @@
-import type { GridColumn, GridRow } from '../declare'
+import { area, type GridColumn, type GridRow } from '../declare'
 import { months } from './site'
 
-const area = (name: string, label: string) => ({ name, label, role: 'table' as const })
 const iso = 'ISO 13790, monthly method'
 const erbs = 'Erbs, Klein and Beckman 1983'
 
@@ -45,7 +44,7 @@ export const heatMonthColumns: readonly GridColumn[] = [
     title: 'Gain to loss',
     quantity: 'ratio',
     digits: 3,
-    formula: '=IF([Loss]=0,0,[Solar gain]/[Loss])',
+    formula: '=IF([Loss]<0.000000001,0,[Solar gain]/[Loss])',
     source: iso,
   },
   {
@@ -116,5 +115,5 @@ export function utilisation(loss: string, ratio: string, a = 'utilisation_expone
   const near = `${a}/(${a}+1)`
   const less = `(1-${ratio}^${a})/(1-${ratio}^(${a}+1))`
   const more = `(${ratio}^-${a}-1)/(${ratio}^-${a}-${ratio})`
-  return `=IF(${loss}=0,0,IF(ABS(${ratio}-1)<0.000000001,${near},IF(${ratio}<1,${less},${more})))`
+  return `=IF(${loss}<0.000000001,0,IF(ABS(${ratio}-1)<0.000000001,${near},IF(${ratio}<1,${less},${more})))`
 }

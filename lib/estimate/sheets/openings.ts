@@ -1,9 +1,8 @@
-import { type GridRow, grid, lookUp, type SheetDeclaration } from '../declare'
+import { area, type GridRow, grid, lookUp, type SheetDeclaration } from '../declare'
 import { surfaceNames } from './surfaces'
 
 export const openingKinds = ['door', 'vent', 'window', 'fan'] as const
 const spareRows = 12
-const area = (name: string, label: string) => ({ name, label, role: 'table' as const })
 
 /** Rows for the given openings and at least a dozen, blank ones to fill in. */
 export function openings(given: readonly GridRow[]): SheetDeclaration {

@@ -1,4 +1,5 @@
 import {
+  area,
   computed,
   type GridColumn,
   type GridRow,
@@ -9,47 +10,18 @@ import {
   lookUp,
   type SheetDeclaration,
 } from '../declare'
-import { utilisation } from './heat-months'
-import { months } from './site'
+import {
+  balanceColumns,
+  balanceRows,
+  compared,
+  gainColumns,
+  gainRows,
+  optionName,
+  own,
+} from './options-months'
 
 const handbook = 'NIST Handbook 135'
-const area = (name: string, label: string) => ({ name, label, role: 'table' as const })
 const of = (column: string): string => lookUp('coverings', '[Covering]', column)
-
-/** The first is what the others are held against; the last is the roof's own covering. */
-const compared = [
-  'FILM-2',
-  'FILM-2-IR',
-  'GLASS-1',
-  'PC-TWIN-8',
-  'PC-TWIN-10',
-  'PC-TRIPLE-16',
-  'PC-FIVE-25',
-  'ACRYL-TWIN-16',
-]
-const own = compared.length
-
-const monthColumns: readonly GridColumn[] = [
-  { title: 'Month', quantity: 'text', ground: 'label', width: 230 },
-  {
-    title: 'Beam on the roof',
-    quantity: 'energy',
-    formula: '=SUMIFS(sun_beam_on_area,sun_month,[Month],sun_part,"roof")*{month_days}*gain_factor',
-    named: area('roof_beam_energy', 'beam on the roof, a month'),
-  },
-  {
-    title: 'Diffuse on the roof',
-    quantity: 'energy',
-    formula: '=SUMIFS(sun_diffuse_on_area,sun_month,[Month],sun_part,"roof")*{month_days}*gain_factor',
-    named: area('roof_diffuse_energy', 'diffuse light on the roof, a month'),
-  },
-  {
-    title: 'Through the walls',
-    quantity: 'energy',
-    formula: '=SUMIFS(sun_through,sun_month,[Month],sun_part,"wall")*{month_days}*gain_factor',
-    named: area('wall_gain', 'gain through the walls, a month'),
-  },
-]
 
 const optionColumns: readonly GridColumn[] = [
   { title: 'Option', quantity: 'text', ground: 'label', width: 230 },
@@ -132,7 +104,7 @@ const optionColumns: readonly GridColumn[] = [
     title: 'Renewals today',
     quantity: 'money',
     formula:
-      '=[First cost]*IF(discount_rate=0,[Times renewed],(1-(1+discount_rate)^-([Times renewed]*[Life]))/((1+discount_rate)^[Life]-1))',
+      '=[First cost]*IF(discount_rate<0.0000001,[Times renewed],(1-(1+discount_rate)^-([Times renewed]*[Life]))/((1+discount_rate)^[Life]-1))',
     source: `${handbook}: present value of each renewal`,
     named: area('option_renewals', 'renewals of each option, today'),
   },
@@ -154,47 +126,16 @@ const optionColumns: readonly GridColumn[] = [
     quantity: 'years',
     digits: 1,
     formula:
-      '=IF([First cost]<={option_first_cost:0},0,IF([Fuel a year]>={option_fuel:0},"never",([First cost]-{option_first_cost:0})/({option_fuel:0}-[Fuel a year])))',
-    source: 'extra first cost over yearly saving, against the first row',
+      '=IF([First cost]<={option_first_cost:0},0,IF({option_fuel:0}-[Fuel a year]<0.01,"never",([First cost]-{option_first_cost:0})/({option_fuel:0}-[Fuel a year])))',
+    source: 'extra first cost over yearly saving, against the first row; a saving under a cent is none',
     named: area('option_payback', 'payback of each option'),
   },
 ]
 
-const optionName = (row: number): string => (row === own ? 'The roof’s own' : `Option ${row + 1}`)
 const optionRows: readonly GridRow[] = [...compared, '=roof_covering'].map((code, row) => ({
   Option: optionName(row),
   Covering: row === own ? { value: code, ground: 'label' } : code,
 }))
-
-const balanceColumns: readonly GridColumn[] = [
-  {
-    title: 'Option',
-    quantity: 'text',
-    ground: 'label',
-    named: area('option_month_option', 'option of the row'),
-  },
-  { title: 'Month', quantity: 'text', ground: 'label' },
-  { title: 'Loss', quantity: 'energy' },
-  { title: 'Gain', quantity: 'energy' },
-  { title: 'Gain to loss', quantity: 'ratio', digits: 3, formula: '=IF([Loss]=0,0,[Gain]/[Loss])' },
-  { title: 'Utilisation', quantity: 'ratio', digits: 3 },
-  {
-    title: 'Heat needed',
-    quantity: 'energy',
-    formula: '=MAX(0,[Loss]-[Utilisation]*[Gain])',
-    named: area('option_month_heat', 'heat of each option and month'),
-  },
-]
-
-const balanceRows: readonly GridRow[] = optionRows.flatMap((_, row) =>
-  months.map((month, index) => ({
-    Option: optionName(row),
-    Month: month,
-    Loss: `=({day_degree_hours:${index}}*{option_day:${row}}+{night_degree_hours:${index}}*{option_night:${row}})*energy_per_heat`,
-    Gain: `={roof_beam_energy:${index}}*{option_direct:${row}}+{roof_diffuse_energy:${index}}*{option_diffuse:${row}}+{wall_gain:${index}}`,
-    Utilisation: utilisation('[Loss]', '[Gain to loss]', `{option_exponent:${row}}`),
-  })),
-)
 
 const roofSum = (of: string, more = ''): string => `=SUMIFS(${of},surface_part,"roof"${more})`
 
@@ -312,7 +253,7 @@ export const options: SheetDeclaration = {
       }),
     ),
     grid({ columns: optionColumns, rows: optionRows }),
-    grid({ columns: monthColumns, rows: months.map((month) => ({ Month: month })) }),
+    grid({ columns: gainColumns, rows: gainRows }),
     grid({ columns: balanceColumns, rows: balanceRows }),
   ],
 }

@@ -1,4 +1,6 @@
 import {
+  area,
+  check,
   computed,
   type GridRow,
   grid,
@@ -10,13 +12,13 @@ import {
 } from '../declare'
 import { surfaceNames } from './surfaces'
 
-const area = (name: string, label: string) => ({ name, label, role: 'table' as const })
 const labour = (code: string, column: string): string => lookUp('labour', `"${code}"`, column)
 
 const sheetLine = (surface: string): GridRow => ({
   Group: 'materials',
   Line: `Sheets, ${surface.toLowerCase()}`,
   Quantity: '={bought_quantity}',
+  Unit: '={bought_unit}',
   'Unit price': '={sheet_prices}',
 })
 
@@ -220,6 +222,15 @@ export const price: SheetDeclaration = {
         quantity: 'money',
         formula: '=ROUND(quotation_total*deposit_rate,2)',
         source: 'firm’s own',
+      }),
+      check({
+        name: 'price_check',
+        label: 'Prices of the coverings',
+        about: 'roof_covering',
+        severity: 'warning',
+        formula:
+          '=IF(COUNTIFS(sheet_prices,0,needed_area,">0")>0,"A covering that is used has no price in its table","in order")',
+        source: 'Coverings, Sheets in stock',
       }),
     ),
   ],

@@ -1,6 +1,4 @@
-import { type GridColumn, type GridRow, lookUp } from '../declare'
-
-const area = (name: string, label: string) => ({ name, label, role: 'table' as const })
+import { area, type GridColumn, type GridRow, lookUp } from '../declare'
 
 interface Facet {
   readonly name: string

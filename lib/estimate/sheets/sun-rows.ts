@@ -1,8 +1,6 @@
-import type { GridColumn, GridRow } from '../declare'
+import { area, type GridColumn, type GridRow } from '../declare'
 import { months } from './site'
 import { facets } from './sun-facets'
-
-const area = (name: string, label: string) => ({ name, label, role: 'table' as const })
 
 /**
  * S1 The cosine of incidence over a day is a + b·cos ω + c·sin ω; it is positive between two hour angles, met with

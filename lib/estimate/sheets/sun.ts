@@ -1,4 +1,5 @@
 import {
+  area,
   computed,
   constant,
   type GridColumn,
@@ -15,7 +16,6 @@ import { sunColumns, sunRows } from './sun-rows'
 const klein = 'Klein 1977, mean days of the months'
 const cooper = 'Cooper 1969; Duffie and Beckman, Solar Engineering of Thermal Processes'
 const erbs = 'Erbs, Klein and Duffie 1982, monthly means, for a clearness of 0.3 to 0.8'
-const area = (name: string, label: string) => ({ name, label, role: 'table' as const })
 
 /** Klein's mean day of each month, and how many days the month has. */
 const meanDays = [17, 47, 75, 105, 135, 162, 198, 228, 258, 288, 318, 344]

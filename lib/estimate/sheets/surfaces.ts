@@ -1,4 +1,5 @@
-import { computed, grid, heading, lines, lookUp, type SheetDeclaration } from '../declare'
+import { area, grid, lines, lookUp, type SheetDeclaration } from '../declare'
+import { surfaceTotals } from './surface-totals'
 
 /** Rows that a frame type does not have keep their place with no width, so that formulas hold for every type. */
 export const surfaceNames = [
@@ -12,7 +13,6 @@ export const surfaceNames = [
 ] as const
 export const kneeWall = 'Knee wall'
 
-const area = (name: string, label: string) => ({ name, label, role: 'table' as const })
 const azimuth = (turn: number) => `=MOD(ridge_azimuth+${turn},360)`
 const end = {
   Part: 'end',
@@ -208,97 +208,6 @@ export const surfaces: SheetDeclaration = {
       ],
       closing: 'Rows for more surfaces go above this line',
     }),
-    lines(
-      heading('All surfaces'),
-      computed({
-        name: 'roof_area',
-        label: 'Roof area',
-        quantity: 'area',
-        formula: '=SUMIFS(surface_gross_area,surface_part,"roof")',
-        source: 'geometry',
-        note: 'Without overhang.',
-      }),
-      computed({
-        name: 'side_wall_area',
-        label: 'Side wall area',
-        quantity: 'area',
-        formula: '=SUMIFS(surface_gross_area,surface_part,"side")',
-        source: 'geometry',
-        note: 'Knee wall and openings included.',
-      }),
-      computed({
-        name: 'end_wall_area',
-        label: 'End wall area',
-        quantity: 'area',
-        formula: '=SUMIFS(surface_gross_area,surface_part,"end")',
-        source: 'geometry',
-        note: 'Knee wall and openings included.',
-      }),
-      computed({
-        name: 'knee_wall_area',
-        label: 'Knee wall area',
-        quantity: 'area',
-        formula: '=SUM(surface_knee_wall_area)',
-        source: 'geometry',
-      }),
-      computed({
-        name: 'opening_area',
-        label: 'Opening area',
-        quantity: 'area',
-        formula: '=SUM(opening_areas)',
-        source: 'Openings',
-      }),
-      computed({
-        name: 'covering_area',
-        label: 'Covering area',
-        quantity: 'area',
-        formula: '=roof_area+side_wall_area+end_wall_area-knee_wall_area-opening_area',
-        source: 'geometry',
-        note: 'Net of openings and knee wall.',
-        total: true,
-      }),
-      computed({
-        name: 'envelope_conductance',
-        label: 'Conductance of the envelope',
-        quantity: 'conductance',
-        formula: '=SUM(surface_conductance)+SUM(opening_conductance)',
-        source: 'ASABE EP406',
-        total: true,
-      }),
-      computed({
-        name: 'day_conductance',
-        label: 'Conductance with the screen drawn back',
-        quantity: 'conductance',
-        formula: '=SUM(surface_day_conductance)+SUM(opening_conductance)',
-        source: 'ASABE EP406',
-      }),
-      computed({
-        name: 'average_u_value',
-        label: 'Average U-value',
-        quantity: 'u-value',
-        formula: '=envelope_conductance/(roof_area+side_wall_area+end_wall_area)',
-        source: 'definition',
-      }),
-      {
-        kind: 'check',
-        name: 'opening_fit_check',
-        label: 'Openings fit their surface',
-        about: 'opening_area',
-        severity: 'impossible',
-        formula:
-          '=IF(MIN(surface_net_area)<-0.000001,"Expected openings no larger than the surface that they are in","in order")',
-        source: 'geometry',
-      },
-      {
-        kind: 'check',
-        name: 'opening_surface_check',
-        label: 'Openings name a surface',
-        about: 'opening_area',
-        severity: 'impossible',
-        formula:
-          '=IF(ABS(opening_area-SUM(surface_opening_area))>0.000001,"Expected every opening to name a surface of this sheet","in order")',
-        source: 'the workbook’s own',
-      },
-    ),
+    lines(...surfaceTotals),
   ],
 }

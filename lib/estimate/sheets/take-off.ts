@@ -1,4 +1,5 @@
 import {
+  area,
   computed,
   type GridColumn,
   type GridRow,
@@ -11,7 +12,6 @@ import {
 } from '../declare'
 import { surfaceNames } from './surfaces'
 
-const area = (name: string, label: string) => ({ name, label, role: 'table' as const })
 const of = (column: string): string => lookUp('coverings', '[Covering]', column)
 const whole = (quotient: string): string => `ROUNDUP(ROUND(${quotient},9),0)`
 
@@ -69,6 +69,12 @@ const columns: readonly GridColumn[] = [
     quantity: 'number',
     formula: '=IF([Sheet width]*[Sheet length]=0,[Area bought],[Sheets])',
     named: area('bought_quantity', 'sheets bought, or the area where it is cut to size'),
+  },
+  {
+    title: 'Bought in',
+    quantity: 'text',
+    formula: '=IF([Sheet width]*[Sheet length]=0,IF(unit_system="us","ft²","m²"),"sheets")',
+    named: area('bought_unit', 'what is bought is counted in'),
   },
   {
     title: 'Weight',

@@ -1,5 +1,7 @@
 import fc from 'fast-check'
 import { afterAll, describe, expect, test, vi } from 'vitest'
+import { buildWorkbook, type InputValue, inOrder, type TemplateInput, templateInputs } from '@/lib/estimate'
+import { frameChecks, type House } from '@/lib/estimate/sheets/frame-checks'
 import { convert } from '@/lib/units'
 import { isCellError } from '@/lib/workbook'
 import { openLive } from './compute'
@@ -156,7 +158,64 @@ describe('generated houses', () => {
       runs,
     )
   })
+
+  test('[G4] what is refused before a workbook is made, its checks say once it is edited into being', () => {
+    const size = fc.integer({ min: 0, max: 12 }).map((half) => half / 2)
+    const any: fc.Arbitrary<House> = fc.record({
+      frame_type: fc.constantFrom('gable', 'hoop', 'gothic', 'lean-to', 'single-slope', 'dome'),
+      frame_width: size.map((value) => value + 1),
+      eave_height: size,
+      ridge_height: size.map((value) => value + 0.5),
+      knee_wall_height: size,
+      front_wall_tilt: fc.constantFrom(90, 90, 70),
+      bay_count: fc.constantFrom(1, 1, 2),
+    })
+    fc.assert(
+      fc.property(any, (house) => {
+        us.set({ ...house })
+        for (const { line, rules } of frameChecks) {
+          const broken = rules.find(({ wrong }) => wrong(house))
+          expect(us.text(line.name)).toBe(broken?.says ?? inOrder)
+        }
+        const given = buildWorkbook({ system: 'us', inputs: { ...house } })
+        const expected = frameChecks.some(({ rules }) => rules.some(({ wrong }) => wrong(house)))
+        expect(given.ok).toBe(!expected)
+      }),
+      { ...runs, numRuns: 80 },
+    )
+  })
+
+  test('[W1] whatever the inputs within their limits, every value is finite or an error in words', () => {
+    const values = templateInputs.map((spec) => [spec.name, withinLimits(spec)] as const)
+    const every = fc.record(Object.fromEntries(values)) as fc.Arbitrary<HouseInputs>
+    fc.assert(
+      fc.property(every, houses, (inputs, house) => {
+        us.set({ ...inputs, ...house })
+        for (const [name, cells] of us.all()) {
+          for (const cell of cells) {
+            if (typeof cell === 'number') expect(Number.isFinite(cell), name).toBe(true)
+            else if (cell !== null && isCellError(cell)) expect.fail(`${name}: ${cell.text}`)
+          }
+        }
+      }),
+      runs,
+    )
+  })
 })
+
+/** Any value that the template's own limits allow, the bounds among them. */
+function withinLimits(spec: TemplateInput): fc.Arbitrary<InputValue> {
+  const { quantity, limits = {}, choices, count } = spec
+  if (quantity === 'boolean') return fc.boolean()
+  if (quantity === 'date') return fc.constant(45_000)
+  if (quantity === 'text')
+    return fc.constantFrom(...(Array.isArray(choices) ? choices : [String(spec.default ?? '')]))
+  const bound = (value: number): number => convert(value, quantity, limits.in ?? 'us', 'us')
+  const max = bound(limits.max ?? 1)
+  const min = limits.above === undefined ? bound(limits.min ?? 0) : bound(limits.above) + max / 1e4
+  const one = limits.whole ? fc.integer({ min, max }) : fc.double({ min, max, noNaN: true })
+  return count === 1 ? one : fc.array(one, { minLength: count, maxLength: count })
+}
 
 /** Constants that are the ratio of two units of the system. */
 const inOwnUnits: ReadonlySet<string> = new Set([
