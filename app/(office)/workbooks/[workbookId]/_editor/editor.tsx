@@ -21,7 +21,7 @@ import { Steps } from './steps'
 import { tryOutTally } from './try-out'
 import { useEditorKeys } from './use-editor-keys'
 import { usePalette } from './use-palette'
-import { useSession, useView } from './use-session'
+import { useShape, useView } from './use-session'
 import { useWorkbooks } from './use-workbooks'
 import { EditorView } from './view-state'
 
@@ -37,7 +37,7 @@ export function Editor({ session }: { readonly session: Session }) {
   const view = useMemo(() => new EditorView(session.workbook), [session])
   const editing = useMemo(() => new Editing(session, view, say), [session, view])
   const platform = useMemo(() => platformOf(navigator.userAgent), [])
-  const { shape } = useSession(session)
+  const shape = useShape(session)
   const { sheet: shown } = useView(view)
   const colours = useCanvasTheme()
   const palette = usePalette()

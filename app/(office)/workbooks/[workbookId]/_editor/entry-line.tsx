@@ -11,7 +11,7 @@ import { NoteField } from './note-field'
 import { lockWords } from './permission-words'
 import { SaveWords } from './save-words'
 import type { WorkbookSession } from './session-contract'
-import { useSession, useView } from './use-session'
+import { useShape, useView } from './use-session'
 import type { EditorView } from './view-state'
 
 interface Props {
@@ -25,7 +25,7 @@ interface Props {
 
 /** The selected cell's input, what it is in words, its unit and source, and whether everything is saved. */
 export function EntryLine({ session, view, editing, note, onNoteDone }: Props) {
-  useSession(session)
+  useShape(session)
   useValuesOf(session, view)
   const { sheet: shown, selection, edit } = useView(view)
   const { row, column } = selection.active

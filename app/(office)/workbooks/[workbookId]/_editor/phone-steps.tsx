@@ -3,7 +3,7 @@
 import Link from 'next/link'
 import { Mark } from '@/app/_ui/mark'
 import type { WorkbookSession } from './session-contract'
-import { useSession, useView } from './use-session'
+import { useShape, useView } from './use-session'
 import type { EditorView } from './view-state'
 
 /** On a narrow screen the steps fold into one line: where you are, and a list to go elsewhere. */
@@ -16,7 +16,7 @@ export function PhoneSteps({
   readonly view: EditorView
   readonly onPalette: () => void
 }) {
-  useSession(session)
+  useShape(session)
   const { sheet: shown } = useView(view)
   const { sheets } = session.workbook
   const steps = sheets.filter((sheet) => sheet.kind === 'step')

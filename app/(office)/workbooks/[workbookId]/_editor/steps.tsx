@@ -8,7 +8,7 @@ import type { Sheet } from '@/lib/workbook'
 import { lockWords } from './permission-words'
 import type { WorkbookSession } from './session-contract'
 import type { StepState } from './step-state'
-import { useSession, useView } from './use-session'
+import { useShape, useView } from './use-session'
 import { useStepStates } from './use-step-states'
 import type { EditorView } from './view-state'
 
@@ -21,7 +21,7 @@ interface Props {
 
 /** The sheets in the order of the work, numbered, each with a state of its own; the tables stand below them. */
 export function Steps({ session, view, platform, onPalette }: Props) {
-  useSession(session)
+  useShape(session)
   const { sheet: shown } = useView(view)
   const states = useStepStates(session)
   const list = useRef<HTMLElement>(null)

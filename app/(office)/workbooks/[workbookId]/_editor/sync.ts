@@ -22,7 +22,7 @@ const signInAgain = 'sign in again to save; your changes are kept on this device
 /** Sends pending operations in order, one request at a time, until the server has them all. */
 export class Sync {
   private disk: Promise<void> = Promise.resolve()
-  private sending = false
+  private sending: Promise<void> | undefined
   private closed = false
   private tries = 0
   private timer: ReturnType<typeof setTimeout> | undefined
@@ -57,14 +57,23 @@ export class Sync {
     this.tries = 0
     if (this.timer) clearTimeout(this.timer)
     this.timer = undefined
-    void this.send()
+    void this.send().then(() => this.catchUp())
+  }
+
+  /** With nothing to send there is no answer that says what others did, so it is asked for. */
+  async catchUp(): Promise<void> {
+    if (this.local.pending.length > 0 || this.sending || this.closed) return
+    const { base } = this.local
+    const missing = await this.server.missing(base)
+    // What was typed or fetched meanwhile brings its own answer.
+    if (!missing || missing.operations.length === 0 || this.closed || this.sending) return
+    if (this.local.base === base) this.integrate(missing.operations, missing.seq)
   }
 
   /** Resolves when the server has everything, or when that cannot be had now. */
   async settle(): Promise<boolean> {
     await this.disk
     await this.send()
-    while (this.sending) await new Promise((resolve) => setTimeout(resolve, 25))
     return this.local.pending.length === 0
   }
 
@@ -87,21 +96,23 @@ export class Sync {
     this.disk = this.disk.then(() => write(queue)).catch(() => undefined)
   }
 
-  /** Sends what is pending, unless that is under way or to be tried later. */
-  async send(): Promise<void> {
-    if (this.sending || this.closed || this.timer) return
-    this.sending = true
-    try {
-      while (this.local.pending.length > 0 && !this.closed) {
-        await this.disk
-        const operations = this.next()
-        if (operations.length === 0) break
-        const answer = await this.server.post({ base: this.local.base, operations })
-        if (this.closed || !(await this.take(answer, operations))) break
-      }
-    } finally {
-      this.sending = false
+  /** Sends what is pending, unless it is to be tried later; resolves when the sending that is under way has ended. */
+  send(): Promise<void> {
+    if (this.closed || this.timer) return Promise.resolve()
+    this.sending ??= this.sendAll().finally(() => {
+      this.sending = undefined
       this.events.changed()
+    })
+    return this.sending
+  }
+
+  private async sendAll(): Promise<void> {
+    while (this.local.pending.length > 0 && !this.closed) {
+      await this.disk
+      const operations = this.next()
+      if (operations.length === 0) break
+      const answer = await this.server.post({ base: this.local.base, operations })
+      if (this.closed || !(await this.take(answer, operations))) break
     }
   }
 

@@ -8,6 +8,12 @@ export function useSession(session: WorkbookSession): SessionSnapshot {
   return useSyncExternalStore((listener) => session.subscribe(listener), read, read)
 }
 
+/** Counts up as lines, sheets, names or columns change; renders for nothing else. */
+export function useShape(session: WorkbookSession): number {
+  const read = () => session.snapshot().shape
+  return useSyncExternalStore((listener) => session.subscribe(listener), read, read)
+}
+
 export function useView(view: EditorView): ViewSnapshot {
   return useSyncExternalStore(view.subscribe, view.snapshot, view.snapshot)
 }

@@ -2,11 +2,11 @@ import { useEffect, useState } from 'react'
 import type { Sheet } from '@/lib/workbook'
 import type { WorkbookSession } from './session-contract'
 import { type StepState, stepState } from './step-state'
-import { useSession } from './use-session'
+import { useShape } from './use-session'
 
 /** States of all sheets by id; read anew, a little after the values have settled, where something changed. */
 export function useStepStates(session: WorkbookSession): ReadonlyMap<string, StepState> {
-  const { shape } = useSession(session)
+  const shape = useShape(session)
   const [states, setStates] = useState<ReadonlyMap<string, StepState>>(new Map())
 
   // biome-ignore lint/correctness/useExhaustiveDependencies: a change of shape asks for every sheet anew

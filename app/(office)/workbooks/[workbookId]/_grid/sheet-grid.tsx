@@ -3,6 +3,7 @@
 import '@glideapps/glide-data-grid/dist/index.css'
 import {
   DataEditor,
+  type DataEditorProps,
   type DataEditorRef,
   type GridSelection,
   type Item,
@@ -13,7 +14,7 @@ import { type Command, type Platform, resolveKey } from '@/lib/commands'
 import type { Sheet } from '@/lib/workbook'
 import { lockWords } from '../_editor/permission-words'
 import type { WorkbookSession } from '../_editor/session-contract'
-import { useSession, useView } from '../_editor/use-session'
+import { useShape, useView } from '../_editor/use-session'
 import { type EditorView, extentOf } from '../_editor/view-state'
 import { currencyOf } from '../_tally/figures'
 import { type CellSource, CellThemes, gridCell, groundOf } from './cell-content'
@@ -46,7 +47,7 @@ export interface SheetGridProps {
 /** One sheet on a canvas. The grid component draws and scrolls; selection, keys, editing and the clipboard are ours. */
 export default function SheetGrid(props: SheetGridProps) {
   const { session, view, editing, sheet, colours, platform, onCommand } = props
-  const { shape } = useSession(session)
+  const shape = useShape(session)
   const { selection } = useView(view)
   const grid = useRef<DataEditorRef>(null)
   const visible = useRef<Rectangle>({ x: 0, y: 0, width: 30, height: 60 })
@@ -77,6 +78,7 @@ export default function SheetGrid(props: SheetGridProps) {
     ([column, row]: Item) => gridCell(source, row + 1, column, themes, readonly),
     [source, themes, readonly],
   )
+  const rowMarkers = useMemo(() => rowNumbers(colours), [colours])
   const drawHeader = useMemo(() => headerDrawer(heads, colours), [heads, colours])
   const drawCell = useMemo(
     () =>
@@ -101,6 +103,8 @@ export default function SheetGrid(props: SheetGridProps) {
       grid: () => grid.current?.focus(),
       reveal: (row, column) => grid.current?.scrollTo(column, row - 1),
     }
+    // Nothing else has the keyboard when the workbook has just been opened.
+    if (document.activeElement === document.body) grid.current?.focus()
   }, [view])
 
   const onGridSelectionChange = (next: GridSelection) => {
@@ -168,22 +172,12 @@ export default function SheetGrid(props: SheetGridProps) {
           cellActivationBehavior="double-click"
           onVisibleRegionChanged={(range) => {
             visible.current = range
-            setScrolled((count) => count + 1)
+            if (view.snapshot().edit) setScrolled((count) => count + 1)
           }}
           onColumnResize={onColumnResize}
           onColumnResizeEnd={onColumnResizeEnd}
           freezeColumns={wide && sheet.columns.length > 1 ? 1 : 0}
-          rowMarkers={{
-            kind: 'clickable-number',
-            startIndex: 2,
-            width: 38,
-            theme: {
-              fontFamily: mono,
-              bgCell: colours.paper,
-              textMedium: colours.quiet,
-              textLight: colours.quiet,
-            },
-          }}
+          rowMarkers={rowMarkers}
           rowHeight={rowHeight}
           headerHeight={headerHeight}
           theme={theme}
@@ -214,6 +208,12 @@ export default function SheetGrid(props: SheetGridProps) {
       <SelectedCellWords session={session} view={view} sheet={sheet} source={source} heads={heads} />
     </>
   )
+}
+
+function rowNumbers({ paper, quiet }: Colours): NonNullable<DataEditorProps['rowMarkers']> {
+  const theme = { fontFamily: mono, bgCell: paper, textMedium: quiet, textLight: quiet }
+  // The first row of the sheet is its heading.
+  return { kind: 'clickable-number', startIndex: 2, width: 38, theme }
 }
 
 function stop(event: KeyboardEvent): void {

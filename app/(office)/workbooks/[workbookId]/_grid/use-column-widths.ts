@@ -3,14 +3,14 @@ import { useEffect, useMemo, useRef, useState } from 'react'
 import type { Sheet } from '@/lib/workbook'
 import { lockWords } from '../_editor/permission-words'
 import type { WorkbookSession } from '../_editor/session-contract'
-import { useSession } from '../_editor/use-session'
+import { useShape } from '../_editor/use-session'
 import type { CellSource } from './cell-content'
 import { fittingWidths } from './columns'
 import type { ColumnHead } from './draw'
 
 /** Widths while the border of a column is dragged; letting go saves them, where this person may. */
 export function useColumnWidths(session: WorkbookSession, sheet: Sheet) {
-  const { shape } = useSession(session)
+  const shape = useShape(session)
   const [widths, setWidths] = useState<ReadonlyMap<number, number>>(new Map())
 
   // biome-ignore lint/correctness/useExhaustiveDependencies: once the workbook holds them, the dragged ones are done with
