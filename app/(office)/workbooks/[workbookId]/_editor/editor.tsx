@@ -80,6 +80,14 @@ export function Editor({ session }: { readonly session: Session }) {
   useEffect(() => view.settle(session.workbook), [view, session, shape])
   useEffect(
     () =>
+      session.onForeign((operations, sheets) => {
+        const text = view.follow(operations, sheets)
+        if (text) say(`Somebody else removed the cell you were writing. You had typed: ${text}`)
+      }),
+    [session, view],
+  )
+  useEffect(
+    () =>
       session.onNews(({ kind, text, place }) => {
         if (kind !== 'moved') say(text)
         else if (place)

@@ -31,6 +31,8 @@ export class LocalWorkbook {
   readonly undone = new UndoStack()
   readonly done = new UndoStack()
   pending: PendingOperation[] = []
+  /** Told what others did, as it reads on top of everything here, before it is applied. */
+  onForeign: (operations: readonly Operation[], sheets: readonly SheetGround[]) => void = () => undefined
 
   constructor(
     readonly workbook: Workbook,
@@ -117,6 +119,7 @@ export class LocalWorkbook {
     const rest = this.pending.filter((operation) => !knownIds.has(operation.id))
     const rebased = rebasePending(this.workbook.sheets, rest, foreign, this.newId)
     this.stepsFollow(sheets, rest, rebased.over)
+    this.onForeign(rebased.over, sheets)
     for (const op of foreign) follow.must(op)
     this.pending = []
     const lost = [...rebased.lost]

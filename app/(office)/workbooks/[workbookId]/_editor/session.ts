@@ -7,6 +7,7 @@ import {
   type Operation,
   type Role,
   refusal,
+  type SheetGround,
   toJson,
   type Workbook,
   type WorkbookOpened,
@@ -27,6 +28,8 @@ export interface SessionNews {
   readonly place?: CellAddress | undefined
 }
 
+export type ForeignListener = (operations: readonly Operation[], sheets: readonly SheetGround[]) => void
+
 /** Joins the parts: the local workbook, the values, the engine's worker, the queue on disk and the sending. */
 export class Session implements WorkbookSession {
   readonly id: string
@@ -39,6 +42,7 @@ export class Session implements WorkbookSession {
   private readonly engine: EngineLink
   private readonly listeners = new Set<() => void>()
   private readonly valueListeners = new Set<(changes: ValueChanges) => void>()
+  private readonly foreignListeners = new Set<ForeignListener>()
   private readonly newsListeners = new Set<(news: SessionNews) => void>()
   private sync: Sync | undefined
   private queue: OperationQueue | undefined
@@ -61,6 +65,9 @@ export class Session implements WorkbookSession {
       stopped: (text) => this.announce({ kind: 'refused', text }),
     })
     this.local = new LocalWorkbook(workbook, opened.snapshot.seq, () => crypto.randomUUID(), this.follow)
+    this.local.onForeign = (operations, sheets) => {
+      for (const listener of this.foreignListeners) listener(operations, sheets)
+    }
     this.current = this.read(0)
     this.local.integrate(opened.tail, opened.seq)
   }
@@ -113,6 +120,12 @@ export class Session implements WorkbookSession {
   onNews(listener: (news: SessionNews) => void): () => void {
     this.newsListeners.add(listener)
     return () => this.newsListeners.delete(listener)
+  }
+
+  /** What somebody else did, told before it is applied here. */
+  onForeign(listener: ForeignListener): () => void {
+    this.foreignListeners.add(listener)
+    return () => this.foreignListeners.delete(listener)
   }
 
   value(address: CellAddress): CellValue {

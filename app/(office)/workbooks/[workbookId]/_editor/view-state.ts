@@ -1,6 +1,7 @@
-import type { Sheet, Workbook } from '@/lib/workbook'
-import { type CellSelection, clamp, type Extent, single } from '../_grid/selection'
+import type { Operation, Sheet, SheetGround, Workbook } from '@/lib/workbook'
+import { type CellSelection, clamp, type Extent, type Point, single } from '../_grid/selection'
 import type { EditorFocus } from './focus'
+import { cellAfter, movesCells } from './follow-cells'
 
 /** A cell being edited; the cell and the entry line show the same text. */
 export interface EditState {
@@ -57,6 +58,21 @@ export class EditorView {
 
   edit(edit: EditState | undefined): void {
     this.set({ edit })
+  }
+
+  /** Somebody else moved lines: the selection and the edit under way go with their cells. Gives back text whose cell is gone. */
+  follow(operations: readonly Operation[], sheets: readonly SheetGround[]): string | undefined {
+    if (!operations.some(movesCells)) return undefined
+    const { sheet, selection, edit } = this.current
+    const point = ({ row, column }: Point): Point =>
+      cellAfter(sheets, { sheet, row, column }, operations) ?? { row, column }
+    const { active, anchor, focus } = selection
+    const moved = edit && cellAfter(sheets, edit, operations)
+    this.set({
+      selection: { active: point(active), anchor: point(anchor), focus: point(focus) },
+      edit: edit && moved && { ...edit, row: moved.row, column: moved.column },
+    })
+    return edit && !moved ? edit.text : undefined
   }
 
   /** After the workbook changed shape: a sheet may be gone, a selection may lie outside. */

@@ -17,6 +17,8 @@ export interface CellEditorProps {
   readonly label: string
   readonly right: boolean
   readonly choices: readonly Choice[] | undefined
+  /** False once the edit has been ended by a key. */
+  readonly isOpen: () => boolean
   readonly onText: (text: string) => void
   readonly onCommit: (text: string, action: Extract<EditAction, { kind: 'commit' }>) => void
   readonly onCancel: () => void
@@ -30,6 +32,7 @@ export function CellEditor(props: CellEditorProps) {
   const listed = useListed(choices, edit)
   const [chosen, setChosen] = useState(() => matching(listed, edit.text))
   const done = useRef(false)
+  const opened = useRef(performance.now())
 
   useLayoutEffect(() => {
     const element = input.current
@@ -98,7 +101,13 @@ export function CellEditor(props: CellEditorProps) {
           onText(event.target.value)
         }}
         onKeyDown={onKeyDown}
-        onBlur={() => {
+        onBlur={(event) => {
+          if (!props.isOpen()) return
+          // The grid takes the focus a frame after the click that opened the cell: it is given back.
+          if (performance.now() - opened.current < settling && isGrid(event.relatedTarget)) {
+            event.currentTarget.focus({ preventScroll: true })
+            return
+          }
           // Clicking elsewhere takes the text, as Enter would; refused text stays open with its reason.
           if (!done.current && !edit.error) commit({ kind: 'commit', axis: 'none', by: 0 })
         }}
@@ -124,6 +133,12 @@ export function CellEditor(props: CellEditorProps) {
       ) : null}
     </div>
   )
+}
+
+const settling = 500
+
+function isGrid(target: EventTarget | null): boolean {
+  return target instanceof Element && target.closest('canvas') !== null
 }
 
 /** What ties the text to its list of choices for assistive technology. */

@@ -39,12 +39,12 @@ export function OpenCell({ session, view, editing, sheet, grid, scrolled, heads 
   const head = heads[open.column]
   return (
     <CellEditor
-      key={`${open.sheet} ${open.row} ${open.column}`}
       edit={open}
       bounds={bounds}
       label={`${cellName(open.row, open.column)} ${head?.title ?? ''}`.trim()}
       right={writtenRight(sheet, open.row, open.column)}
       choices={cellChoices(session, sheet, open.row, open.column)}
+      isOpen={() => view.snapshot().edit?.where === 'cell'}
       onText={(text) => editing.retype(text)}
       onCommit={(text, { axis, by }) => editing.commit(text, axis, by)}
       onCancel={() => editing.cancel()}

@@ -51,6 +51,8 @@ export default function SheetGrid(props: SheetGridProps) {
   const { selection } = useView(view)
   const grid = useRef<DataEditorRef>(null)
   const visible = useRef<Rectangle>({ x: 0, y: 0, width: 30, height: 60 })
+  /** Once the sheet is drawn it takes the keyboard, unless something else has it. */
+  const drawn = useRef(false)
   const [scrolled, setScrolled] = useState(0)
   const settled = useChangedCells(session, sheet.id, grid, visible)
   const { widths, onColumnResize, onColumnResizeEnd } = useColumnWidths(session, sheet)
@@ -103,8 +105,6 @@ export default function SheetGrid(props: SheetGridProps) {
       grid: () => grid.current?.focus(),
       reveal: (row, column) => grid.current?.scrollTo(column, row - 1),
     }
-    // Nothing else has the keyboard when the workbook has just been opened.
-    if (document.activeElement === document.body) grid.current?.focus()
   }, [view])
 
   const onGridSelectionChange = (next: GridSelection) => {
@@ -172,6 +172,8 @@ export default function SheetGrid(props: SheetGridProps) {
           cellActivationBehavior="double-click"
           onVisibleRegionChanged={(range) => {
             visible.current = range
+            if (!drawn.current) requestAnimationFrame(() => takeKeyboard(grid.current))
+            drawn.current = true
             if (view.snapshot().edit) setScrolled((count) => count + 1)
           }}
           onColumnResize={onColumnResize}
@@ -208,6 +210,10 @@ export default function SheetGrid(props: SheetGridProps) {
       <SelectedCellWords session={session} view={view} sheet={sheet} source={source} heads={heads} />
     </>
   )
+}
+
+function takeKeyboard(grid: DataEditorRef | null): void {
+  if (document.activeElement === document.body) grid?.focus()
 }
 
 function rowNumbers({ paper, quiet }: Colours): NonNullable<DataEditorProps['rowMarkers']> {
