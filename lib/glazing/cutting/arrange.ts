@@ -60,11 +60,14 @@ export function arrange(
       continue
     }
     waiting.delete(slope)
-    const rise = Math.abs(only.rise ?? 0)
-    const lift = partner.length - rise + slantedKerf(only.width, rise, kerf)
-    put(lift + only.length, only.width, [
-      { mark: partner.mark, u: 0, v, turned: false },
-      { mark: only.mark, u: 0, v: v + lift, turned: true },
+    const rise = partner.rise ?? 0
+    const lift = partner.length - Math.abs(rise) + slantedKerf(partner.width, rise, kerf)
+    // The slants lie on one line when the pieces meet at the side where they are low.
+    const wider = Math.max(partner.width, only.width)
+    const beside = (width: number) => (rise < 0 ? wider - width : 0)
+    put(Math.max(partner.length, lift + only.length), wider, [
+      { mark: partner.mark, u: beside(partner.width), v, turned: false },
+      { mark: only.mark, u: beside(only.width), v: v + lift, turned: true },
     ])
   }
   for (const piece of waiting.values()) alone(piece)

@@ -1,28 +1,36 @@
-import { bestFilling } from './knapsack'
+import type { Pricer } from './pricing'
+import { pricerOf } from './pricing'
 import type { Instance, Pattern } from './problem'
 
 /**
  * The linear relaxation by column generation (Gilmore and Gomory 1961): a revised simplex over the patterns
- * in the basis, new patterns priced by a knapsack for every stock length. Rows: one a length (at least the
- * demand), then one a stock option of limited number (at most what there is).
+ * in the basis, new patterns priced for every stock length. Rows: one a length (at least the demand), then one
+ * a stock option of limited number (at most what there is).
  */
 export interface Relaxation {
   /** Patterns of the basis with how many bars of each (fractions). */
   readonly solution: readonly { readonly pattern: Pattern; readonly bars: number }[]
   /** A proven lower bound on the cost of every plan, from dual values. */
   readonly bound: number
-  /** Every pattern that was priced in, for an integer program. */
+  /** Every pattern that was priced in, for an integer program and for relaxations of what is left. */
   readonly pool: readonly Pattern[]
 }
 
-interface BasisColumn {
-  readonly kind: 'pattern' | 'slack' | 'artificial'
-  readonly entries: readonly (readonly [row: number, value: number])[]
+interface Column {
+  readonly rows: readonly number[]
+  readonly values: readonly number[]
   readonly cost: number
   readonly pattern?: Pattern
 }
 
-export function relax(instance: Instance, start: readonly Pattern[] = []): Relaxation {
+export interface RelaxOptions {
+  readonly start?: readonly Pattern[]
+  readonly pricer?: Pricer
+  /** How often patterns may be priced; the bound holds all the same. */
+  readonly pricings?: number
+}
+
+export function relax(instance: Instance, options: RelaxOptions = {}): Relaxation {
   const { demands, stock } = instance
   const pieceRows = demands.length
   const limited = stock.flatMap((option, s) => (Number.isFinite(option.available) ? [s] : []))
@@ -30,61 +38,70 @@ export function relax(instance: Instance, start: readonly Pattern[] = []): Relax
   const rows = pieceRows + limited.length
   const right = [...demands, ...limited.map((s) => stock[s]?.available ?? 0)]
   const dearest = Math.max(1e-9, ...stock.map((option) => option.price))
-  const penalty = 1e4 * dearest
-
-  const basis: BasisColumn[] = right.map((_, row) => ({
-    kind: row < pieceRows ? 'artificial' : 'slack',
-    entries: [[row, 1]],
-    cost: row < pieceRows ? penalty : 0,
-  }))
-  const inverse = right.map((_, row) => right.map((__, column): number => (row === column ? 1 : 0)))
-  // A hair more demand, growing with the row, keeps ties out of the ratio test; the bound uses the true demand.
-  const level = right.map((value, row) => value + (1e-7 * (row + 1)) / rows)
-  const duals = new Array<number>(rows).fill(0)
-  const pool: Pattern[] = []
-
-  const column = (pattern: Pattern): BasisColumn => {
-    const entries: [number, number][] = []
+  const gain = 1e-7 * dearest
+  const columnOf = (pattern: Pattern): Column => {
+    const at: number[] = []
+    const values: number[] = []
     pattern.counts.forEach((count, row) => {
-      if (count > 0) entries.push([row, count])
+      if (count === 0) return
+      at.push(row)
+      values.push(count)
     })
     const row = rowOfStock.get(pattern.stock)
-    if (row !== undefined) entries.push([row, 1])
-    return { kind: 'pattern', entries, cost: stock[pattern.stock]?.price ?? 0, pattern }
+    if (row !== undefined) {
+      at.push(row)
+      values.push(1)
+    }
+    return { rows: at, values, cost: stock[pattern.stock]?.price ?? 0, pattern }
   }
-  const reduced = (candidate: BasisColumn) =>
-    candidate.cost - candidate.entries.reduce((sum, [row, value]) => sum + value * (duals[row] ?? 0), 0)
+  const basis: Column[] = right.map((_, row) => ({
+    rows: [row],
+    values: [1],
+    cost: row < pieceRows ? 1e4 * dearest : 0,
+  }))
+  const inverse = new Float64Array(rows * rows)
+  for (let row = 0; row < rows; row += 1) inverse[row * rows + row] = 1
+  // A hair more demand, growing with the row, keeps ties out of the ratio test; the bound uses the true demand.
+  const level = Float64Array.from(right, (value, row) => value + (1e-7 * (row + 1)) / rows)
+  const duals = new Float64Array(rows)
+  const direction = new Float64Array(rows)
 
-  const price = () => {
-    for (let c = 0; c < rows; c += 1) {
-      let sum = 0
-      for (let r = 0; r < rows; r += 1) sum += (basis[r]?.cost ?? 0) * (inverse[r]?.[c] ?? 0)
-      duals[c] = sum
+  const price = (): void => {
+    duals.fill(0)
+    for (let r = 0; r < rows; r += 1) {
+      const cost = basis[r]?.cost ?? 0
+      if (cost !== 0)
+        for (let c = 0; c < rows; c += 1) duals[c] = (duals[c] ?? 0) + cost * (inverse[r * rows + c] ?? 0)
     }
   }
-  const enter = (entering: BasisColumn): boolean => {
-    const direction = inverse.map((line) =>
-      entering.entries.reduce((sum, [row, value]) => sum + value * (line[row] ?? 0), 0),
-    )
+  const reduced = ({ cost, rows: at, values }: Column): number => {
+    let sum = cost
+    for (let k = 0; k < at.length; k += 1) sum -= (values[k] ?? 0) * (duals[at[k] ?? 0] ?? 0)
+    return sum
+  }
+  const enter = (entering: Column): boolean => {
     let leaving = -1
     let step = Number.POSITIVE_INFINITY
-    direction.forEach((d, r) => {
-      if (d <= 1e-9) return
+    for (let r = 0; r < rows; r += 1) {
+      let d = 0
+      for (let k = 0; k < entering.rows.length; k += 1)
+        d += (entering.values[k] ?? 0) * (inverse[r * rows + (entering.rows[k] ?? 0)] ?? 0)
+      direction[r] = d
+      if (d <= 1e-9) continue
       const ratio = (level[r] ?? 0) / d
       if (ratio < step - 1e-13) {
         step = ratio
         leaving = r
       }
-    })
+    }
     if (leaving < 0) return false
     const pivot = direction[leaving] ?? 1
-    const pivotLine = (inverse[leaving] ?? []).map((value) => value / pivot)
-    inverse[leaving] = pivotLine
+    for (let c = 0; c < rows; c += 1) inverse[leaving * rows + c] = (inverse[leaving * rows + c] ?? 0) / pivot
     for (let r = 0; r < rows; r += 1) {
       const d = direction[r] ?? 0
       if (r === leaving || d === 0) continue
-      const line = inverse[r] ?? []
-      for (let c = 0; c < rows; c += 1) line[c] = (line[c] ?? 0) - d * (pivotLine[c] ?? 0)
+      for (let c = 0; c < rows; c += 1)
+        inverse[r * rows + c] = (inverse[r * rows + c] ?? 0) - d * (inverse[leaving * rows + c] ?? 0)
       level[r] = Math.max(0, (level[r] ?? 0) - d * step)
     }
     level[leaving] = step
@@ -92,78 +109,51 @@ export function relax(instance: Instance, start: readonly Pattern[] = []): Relax
     return true
   }
 
-  const starters = start.map(column)
+  const pricer = options.pricer ?? pricerOf(instance)
+  const columns = (options.start ?? []).map(columnOf)
+  const slacks = right.map((_, row): Column => ({ rows: [row], values: [row < pieceRows ? -1 : 1], cost: 0 }))
   let bound = 0
-  for (let round = 0; round < 40 * rows + 400; round += 1) {
+  let pricings = 0
+  for (let round = 0; round < 60 * rows + 600; round += 1) {
     price()
-    const slack = cheapestSlack(duals, pieceRows)
-    const ready = starters
-      .map((candidate) => ({ candidate, cost: reduced(candidate) }))
-      .reduce<{ candidate: BasisColumn; cost: number } | undefined>(
-        (best, next) => (next.cost < (best?.cost ?? -1e-7) ? next : best),
-        undefined,
-      )
-    if (slack && !enter(slack)) break
-    if (slack) continue
-    if (ready && enter(ready.candidate)) continue
-    const { pattern, shrink } = pricePatterns(instance, duals, rowOfStock)
-    const worth = right.reduce(
-      (sum, value, row) => sum + (duals[row] ?? 0) * value * (row < pieceRows ? shrink : 1),
-      0,
-    )
+    let entering: Column | undefined
+    let least = -gain
+    for (const list of [slacks, columns])
+      for (const column of list) {
+        const cost = reduced(column)
+        if (cost >= least) continue
+        least = cost
+        entering = column
+      }
+    if (entering) {
+      if (!enter(entering)) break
+      continue
+    }
+    if (pricings >= (options.pricings ?? Number.POSITIVE_INFINITY)) break
+    pricings += 1
+    const floors = stock.map((option, s) => {
+      const row = rowOfStock.get(s)
+      return Math.max(0, option.price - (row === undefined ? 0 : (duals[row] ?? 0)))
+    })
+    const values = duals.map((dual, row) => (row < pieceRows ? Math.max(0, dual) : 0)).slice(0, pieceRows)
+    const { patterns, upper } = pricer(values, demands, floors)
     // Dual values made feasible by shrinking (Farley 1990) bound every plan from below.
+    let shrink = 1
+    upper.forEach((most, s) => {
+      const floor = floors[s] ?? 0
+      if (most > floor * (1 + 1e-12)) shrink = Math.min(shrink, floor / most)
+    })
+    let worth = 0
+    right.forEach((value, row) => {
+      worth += (duals[row] ?? 0) * value * (row < pieceRows ? shrink : 1)
+    })
     bound = Math.max(bound, worth)
-    if (!pattern) break
-    pool.push(pattern)
-    if (!enter(column(pattern))) break
+    const fresh = patterns.map(columnOf).filter((column) => reduced(column) < -gain)
+    if (fresh.length === 0) break
+    columns.push(...fresh)
   }
-  const solution = basis.flatMap((entry, row) =>
-    entry.pattern ? [{ pattern: entry.pattern, bars: level[row] ?? 0 }] : [],
+  const solution = basis.flatMap((column, row) =>
+    column.pattern ? [{ pattern: column.pattern, bars: level[row] ?? 0 }] : [],
   )
-  return { solution, bound, pool: [...start, ...pool] }
-}
-
-/** A surplus (more pieces than asked) or an unused limited stock that would lower the cost. */
-function cheapestSlack(duals: readonly number[], pieceRows: number): BasisColumn | undefined {
-  let worst = -1e-9
-  let found: BasisColumn | undefined
-  duals.forEach((dual, row) => {
-    const cost = row < pieceRows ? dual : -dual
-    if (cost < worst) {
-      worst = cost
-      found = { kind: 'slack', entries: [[row, row < pieceRows ? -1 : 1]], cost: 0 }
-    }
-  })
-  return found
-}
-
-function pricePatterns(
-  instance: Instance,
-  duals: readonly number[],
-  rowOfStock: ReadonlyMap<number, number>,
-): { readonly pattern: Pattern | undefined; readonly shrink: number } {
-  const values = instance.demands.map((_, row) => Math.max(0, duals[row] ?? 0))
-  let pattern: Pattern | undefined
-  let gain = 1e-7
-  let shrink = 1
-  instance.stock.forEach((option, s) => {
-    const row = rowOfStock.get(s)
-    const cost = option.price - (row === undefined ? 0 : (duals[row] ?? 0))
-    const filling = bestFilling(
-      values,
-      instance.weights,
-      instance.demands,
-      option.capacity,
-      cost,
-      instance.tolerance,
-      instance.nests,
-    )
-    if (filling.upper > cost * (1 + 1e-12))
-      shrink = Math.min(shrink, Math.max(0, cost) / Math.max(1e-12, filling.upper))
-    if (filling.counts && filling.value - cost > gain) {
-      gain = filling.value - cost
-      pattern = { stock: s, counts: filling.counts }
-    }
-  })
-  return { pattern, shrink }
+  return { solution, bound, pool: columns.flatMap((column) => (column.pattern ? [column.pattern] : [])) }
 }

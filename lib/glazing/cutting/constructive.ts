@@ -122,3 +122,63 @@ function sequence(seed: number): () => number {
     return state / 4_294_967_296
   }
 }
+
+/**
+ * First-fit decreasing bar by bar, each filled bar repeated as often as the demand lets it: for jobs of so many pieces
+ * that they are not looked at one by one. The cheapest over every stock length; `undefined` when the stock does not suffice.
+ */
+export function repeatedFilling(
+  instance: Instance,
+  left: readonly number[],
+  demands: readonly number[] = instance.demands,
+): Bars | undefined {
+  let best: Bars | undefined
+  instance.stock.forEach((_, s) => {
+    const bars = fillFrom(instance, s, left, demands)
+    if (!bars) return
+    const smaller = downsize(instance, bars, left)
+    if (!best || costOf(instance, smaller) < costOf(instance, best) - 1e-9) best = smaller
+  })
+  return best
+}
+
+function fillFrom(
+  instance: Instance,
+  opening: number,
+  left: readonly number[],
+  demands: readonly number[],
+): Bars | undefined {
+  const { weights, nests, stock, tolerance } = instance
+  const asked = [...demands]
+  const remaining = [...left]
+  const bars: Bars = []
+  let first = 0
+  while (first < asked.length) {
+    if ((asked[first] ?? 0) === 0) {
+      first += 1
+      continue
+    }
+    const longest = (weights[first] ?? 0) + (nests[first]?.half ?? 0)
+    const s = stockFor(instance, longest, opening, remaining)
+    if (s === undefined) return undefined
+    let room = stock[s]?.capacity ?? 0
+    const counts = weights.map(() => 0)
+    for (let type = first; type < asked.length; type += 1) {
+      // A slanted piece is counted whole: what partners save is left to the search.
+      const weight = (weights[type] ?? 0) + (nests[type]?.half ?? 0)
+      const count = Math.min(asked[type] ?? 0, Math.floor((room + tolerance) / weight))
+      counts[type] = count
+      room -= count * weight
+    }
+    let times = remaining[s] ?? 0
+    counts.forEach((count, type) => {
+      if (count > 0) times = Math.min(times, Math.floor((asked[type] ?? 0) / count))
+    })
+    counts.forEach((count, type) => {
+      asked[type] = (asked[type] ?? 0) - count * times
+    })
+    remaining[s] = (remaining[s] ?? 0) - times
+    for (let k = 0; k < times; k += 1) bars.push({ stock: s, counts })
+  }
+  return bars
+}

@@ -2,7 +2,7 @@ import loadHighs from 'highs'
 import type { SolveIntegerProgram } from './exact'
 
 /** HiGHS (wasm). Work is limited by branch nodes, so that the answer does not depend on the machine's speed. */
-export async function loadIntegerProgram(nodeLimit = 4_000): Promise<SolveIntegerProgram> {
+export async function loadIntegerProgram(nodeLimit = 300): Promise<SolveIntegerProgram> {
   const highs = await loadHighs()
   return (model) => {
     const solution = highs.solve(model, {
@@ -15,7 +15,10 @@ export async function loadIntegerProgram(nodeLimit = 4_000): Promise<SolveIntege
     for (const [name, column] of Object.entries(solution.Columns)) {
       if ('Primal' in column && typeof column.Primal === 'number') values[name] = column.Primal
     }
-    if (solution.Status !== 'Optimal') return undefined
-    return { objective: solution.ObjectiveValue, values, bound: solution.ObjectiveValue }
+    const proven = solution.Status === 'Optimal'
+    if (!proven && Object.keys(values).length === 0) return undefined
+    // Stopped before the end: the best plan so far, of which nothing is proven.
+    const bound = proven ? solution.ObjectiveValue : Number.NEGATIVE_INFINITY
+    return { objective: solution.ObjectiveValue, values, bound }
   }
 }

@@ -69,7 +69,8 @@ export interface StockOption {
   readonly available: number
 }
 
-const largestCount = 1_000_000
+const mostPieces = 100_000
+const mostLengths = 2_000
 
 /** Errors: `invalid` with the piece or bar at fault and what was expected. */
 export function toInstance(problem: CuttingProblem): Result<Instance> {
@@ -87,15 +88,18 @@ export function toInstance(problem: CuttingProblem): Result<Instance> {
     if (available !== undefined && !(Number.isInteger(available) && available >= 0))
       return fail('invalid', `Expected a whole number available of stock ${bar.length}, not ${available}.`)
   }
+  if (stock.every((bar) => bar.available === 0)) return fail('limit', 'Expected stock that is available.')
   const longest = Math.max(...stock.filter((bar) => bar.available !== 0).map((bar) => bar.length))
   const tolerance = 1e-9 * Math.max(1, ...stock.map((bar) => bar.length))
   const types = new Map<string, PieceType>()
   const slopes = new Map<string, number>()
+  let many = 0
   for (const piece of pieces) {
+    many += piece.count
     const called = piece.mark === undefined ? `length ${piece.length}` : `${piece.mark} (${piece.length})`
     if (!(piece.length > 0) || !Number.isFinite(piece.length))
       return fail('invalid', `Expected a piece length above 0, not ${called}.`)
-    if (!Number.isInteger(piece.count) || piece.count < 0 || piece.count > largestCount)
+    if (!Number.isInteger(piece.count) || piece.count < 0 || piece.count > mostPieces)
       return fail('invalid', `Expected a whole count for piece ${called}, not ${piece.count}.`)
     if (piece.length > longest + tolerance)
       return fail('invalid', `Piece ${called} is longer than every stock length (longest ${longest}).`)
@@ -105,6 +109,9 @@ export function toInstance(problem: CuttingProblem): Result<Instance> {
     if (type) type.demand += piece.count
     else types.set(key, { key, length: piece.length, demand: piece.count, nest: nestOf(piece.nest, slopes) })
   }
+  if (many > mostPieces) return fail('limit', `Expected at most ${mostPieces} pieces in all, not ${many}.`)
+  if (types.size > mostLengths)
+    return fail('limit', `Expected at most ${mostLengths} different lengths, not ${types.size}.`)
   const list = [...types.values()].sort(
     (a, b) => b.length - a.length || (a.key < b.key ? -1 : a.key > b.key ? 1 : 0),
   )

@@ -2,8 +2,7 @@ import { fail, type Result, succeed } from '../../failures'
 import { arrange, type Level, slantedKerf } from './arrange'
 import { relax } from './column-generation'
 import type { SolveIntegerProgram } from './exact'
-import type { CuttingProblem } from './problem'
-import { toInstance } from './problem'
+import { type CuttingProblem, type Nest, toInstance } from './problem'
 import { firstCut, solveCutting, stepUp } from './solve'
 
 export interface SheetPiece {
@@ -43,6 +42,7 @@ interface Draft {
 }
 
 /**
+ * C11 Two pieces of the same slope out of one sheet share the slanted cut: low + low + rise + kerf.
  * C10 Two stages: a sheet is crosscut into levels, a level ripped into pieces; pieces keep their length along the flutes
  * and are at most turned half round.
  * C12 The bound holds for every plan of this kind: where no two pieces fit side by side it is that of the lengths;
@@ -65,11 +65,12 @@ export function cutSheets(
       'invalid',
       `Expected a stock sheet that holds piece ${tooLarge.mark} (${tooLarge.width} by ${tooLarge.length}).`,
     )
+  const nests = nestsOf(pieces, kerf)
   let best: { readonly drafts: readonly Draft[]; readonly problem: CuttingProblem } | undefined
   let least = Number.POSITIVE_INFINITY
   for (const alike of [1, 0.75, 0]) {
     const drafts = compose(pieces, width, kerf, alike)
-    const problem = problemOf(drafts, stock, kerf)
+    const problem = problemOf(drafts, stock, kerf, nests)
     const cost = firstCut(problem)
     if (!cost.ok) return cost
     if (best && cost.value >= least - 1e-9) continue
@@ -86,13 +87,13 @@ export function cutSheets(
       const draft = drafts[Number(mark)]
       return draft ? [draft.pieces] : []
     })
-    const levels = arrange(groups, kerf, (piece) => nestOf(piece, kerf)?.slope)
+    const levels = arrange(groups, kerf, (piece) => nests(piece)?.slope)
     return { length: bar.stock, price, levels, offcut: bar.offcut }
   })
   const { cost } = plan.value
   if (drafts.length === pieces.length && !fitsBeside(pieces, width, kerf))
     return succeed({ sheets, cost, bound: plan.value.bound, proven: plan.value.proven })
-  const bound = Math.min(cost, widthBound(pieces, stock, width, kerf))
+  const bound = Math.min(cost, widthBound(pieces, stock, width, kerf, nests))
   return succeed({ sheets, cost, bound, proven: cost <= bound + 1e-7 * Math.max(1, cost) })
 }
 
@@ -102,7 +103,9 @@ export function sheetEstimate(
   stock: readonly SheetStock[],
   kerf: number,
 ): Result<number> {
-  return firstCut(problemOf(compose(pieces, stock[0]?.width ?? 0, kerf, 0.75), stock, kerf))
+  return firstCut(
+    problemOf(compose(pieces, stock[0]?.width ?? 0, kerf, 0.75), stock, kerf, nestsOf(pieces, kerf)),
+  )
 }
 
 /** Longest first, each into the first level that has width left and is not too much longer (`alike`). */
@@ -131,25 +134,43 @@ function compose(pieces: readonly SheetPiece[], width: number, kerf: number, ali
   return levels
 }
 
-function problemOf(drafts: readonly Draft[], stock: readonly SheetStock[], kerf: number): CuttingProblem {
+function problemOf(
+  drafts: readonly Draft[],
+  stock: readonly SheetStock[],
+  kerf: number,
+  nests: Nests,
+): CuttingProblem {
   return {
     kerf,
     stock,
     pieces: drafts.map((draft, i) => {
       const [only, second] = draft.pieces
       const piece = { length: draft.length, count: 1, mark: String(i) }
-      if (!only || second) return piece
-      const nest = nestOf(only, kerf)
+      const nest = only && !second ? nests(only) : undefined
       return nest ? { ...piece, nest } : piece
     }),
   }
 }
 
-/** The rise is saved, less what the slanted cut takes more than a square one. */
-function nestOf({ width, rise }: SheetPiece, kerf: number) {
-  if (rise === undefined || rise === 0) return undefined
-  const saving = Math.abs(rise) - (slantedKerf(width, rise, kerf) - kerf)
-  return saving > 0 ? { slope: `${width}:${rise}`, saving } : undefined
+type Nests = (piece: SheetPiece) => Nest | undefined
+
+/** By slope: what a pair saves is the least of its pieces' rises, less what the slanted cut takes more than a square one. */
+function nestsOf(pieces: readonly SheetPiece[], kerf: number): Nests {
+  const slopeOf = ({ width, rise }: SheetPiece): string | undefined =>
+    rise === undefined || rise === 0 ? undefined : (rise / width).toFixed(6)
+  const savings = new Map<string, number>()
+  for (const piece of pieces) {
+    const slope = slopeOf(piece)
+    if (slope === undefined) continue
+    const rise = piece.rise ?? 0
+    const saving = Math.abs(rise) - (slantedKerf(piece.width, rise, kerf) - kerf)
+    savings.set(slope, Math.min(savings.get(slope) ?? Number.POSITIVE_INFINITY, saving))
+  }
+  return (piece) => {
+    const slope = slopeOf(piece)
+    const saving = slope === undefined ? 0 : (savings.get(slope) ?? 0)
+    return slope !== undefined && saving > 0 ? { slope, saving } : undefined
+  }
 }
 
 function fitsBeside(pieces: readonly SheetPiece[], width: number, kerf: number): boolean {
@@ -162,6 +183,7 @@ function widthBound(
   stock: readonly SheetStock[],
   width: number,
   kerf: number,
+  nests: Nests,
 ): number {
   const share = (piece: SheetPiece) => (piece.width + kerf) / (width + kerf)
   const shares = [...new Set(pieces.map(share).filter((value) => value <= 0.5))].sort((a, b) => a - b)
@@ -172,7 +194,7 @@ function widthBound(
     const counted = pieces.flatMap((piece) => {
       const x = share(piece)
       const part = x > 1 - limit + 1e-9 ? 1 : x < limit - 1e-9 ? 0 : Math.min(1, x)
-      const length = (piece.length + kerf - (nestOf(piece, kerf)?.saving ?? 0) / 2) * part
+      const length = (piece.length + kerf - (nests(piece)?.saving ?? 0) / 2) * part
       return length > 0 ? [{ length: Math.round(length * 1e9) / 1e9 - 1e-9, count: 1 }] : []
     })
     if (counted.length === 0) continue

@@ -1,17 +1,19 @@
 import { fail, type Result, succeed } from '../../failures'
 import { relax } from './column-generation'
-import { type Bars, constructive, costOf, downsize } from './constructive'
+import { type Bars, constructive, costOf, downsize, repeatedFilling } from './constructive'
 import { cheaper, coveringProgram, maximalPatterns, type SolveIntegerProgram, toBars } from './exact'
+import { pricerOf } from './pricing'
 import {
   type Bar,
   type CuttingPlan,
   type CuttingProblem,
   type Instance,
+  type Pattern,
   toInstance,
   typeKey,
   used,
 } from './problem'
-import { roundRelaxation } from './rounding'
+import { type Dive, roundRelaxation } from './rounding'
 
 /**
  * Least cost, then least waste, then fewest bars. Column generation bounds the cost and nearly always gives the
@@ -29,15 +31,21 @@ export function solveCutting(
   if (instance.demands.length === 0) return succeed({ bars: [], cost: 0, waste: 0, bound: 0, proven: true })
 
   const available = instance.stock.map((option) => option.available)
-  const many = instance.demands.reduce((sum, count) => sum + count, 0)
-  let best = constructive(instance, instance.demands, available, 0)
-  const relaxation = relax(instance)
+  let best = plainPlan(instance)
+  if (instance.demands.length > mostTypes) {
+    const bound = stepUp(instance, boundByLength(instance))
+    return best ? succeed(toPlan(problem, instance, best, bound)) : tooLittle()
+  }
+  const pricer = pricerOf(instance)
+  const relaxation = relax(instance, { start: distinctOf(best), pricer })
   let bound = stepUp(instance, relaxation.bound)
   const done = () => best !== undefined && costOf(instance, best) <= bound + slack(bound)
-  if (!done()) best = cheaper(instance, best, roundRelaxation(instance, relaxation, many > 2_000 ? 4 : 24))
-
+  for (const dive of dives) {
+    if (done()) break
+    best = cheaper(instance, best, roundRelaxation(instance, relaxation, pricer, dive, bound + slack(bound)))
+  }
   if (integerProgram && !done()) {
-    const all = maximalPatterns(instance, 4_000)
+    const all = maximalPatterns(instance, 1_500)
     const patterns = all ?? relaxation.pool
     const solved = integerProgram(coveringProgram(instance, patterns))
     if (solved) {
@@ -45,8 +53,7 @@ export function solveCutting(
       if (all) bound = Math.max(bound, stepUp(instance, solved.bound))
     }
   }
-  if (!best || best.length === 0)
-    return fail('limit', 'The stock that is available does not suffice for all pieces.')
+  if (!best || best.length === 0) return tooLittle()
   return succeed(toPlan(problem, instance, downsize(instance, best, available), bound))
 }
 
@@ -54,11 +61,42 @@ export function solveCutting(
 export function firstCut(problem: CuttingProblem): Result<number> {
   const made = toInstance(problem)
   if (!made.ok) return made
-  const instance = made.value
+  const bars = plainPlan(made.value)
+  return bars ? succeed(costOf(made.value, bars)) : tooLittle()
+}
+
+/** Above this many different lengths a plain plan is made, and its distance from the bound by length stated. */
+const mostTypes = 400
+/** Above this many pieces they are not looked at one by one. */
+const mostSingly = 3_000
+
+function plainPlan(instance: Instance): Bars | undefined {
   const available = instance.stock.map((option) => option.available)
-  const bars = constructive(instance, instance.demands, available, 0)
-  if (!bars) return fail('limit', 'The stock that is available does not suffice for all pieces.')
-  return succeed(costOf(instance, bars))
+  const many = instance.demands.reduce((sum, count) => sum + count, 0)
+  if (many > mostSingly) return repeatedFilling(instance, available)
+  return constructive(instance, instance.demands, available, 0)
+}
+
+/** No plan costs less than all the length that is needed at the cheapest price by length. */
+function boundByLength(instance: Instance): number {
+  const needed = instance.demands.reduce((sum, count, i) => sum + count * (instance.weights[i] ?? 0), 0)
+  return needed * Math.min(...instance.stock.map((option) => option.price / option.capacity))
+}
+
+function tooLittle() {
+  return fail('limit', 'The stock that is available does not suffice for all pieces.')
+}
+
+const dives: readonly Dive[] = [
+  { together: 0.7, by: 'part', shuffles: 4 },
+  { together: 1, by: 'filling', shuffles: 4 },
+  { together: 0.5, by: 'filling', shuffles: 4 },
+]
+
+function distinctOf(bars: Bars | undefined): Pattern[] {
+  const seen = new Map<string, Pattern>()
+  for (const bar of bars ?? []) seen.set(`${bar.stock}:${bar.counts.join()}`, bar)
+  return [...seen.values()]
 }
 
 function slack(bound: number): number {
@@ -84,11 +122,13 @@ function toPlan(problem: CuttingProblem, instance: Instance, bars: Bars, bound: 
     if (piece.count > 0) list.push({ mark: piece.mark ?? '', left: piece.count })
     marks.set(typeKey(piece), list)
   }
+  const at = new Map<string, number>()
   const nextMark = (type: number): string => {
-    const list = marks.get(instance.keys[type] ?? '') ?? []
-    const first = list.find((entry) => entry.left > 0)
+    const key = instance.keys[type] ?? ''
+    const first = marks.get(key)?.[at.get(key) ?? 0]
     if (!first) return ''
     first.left -= 1
+    if (first.left === 0) at.set(key, (at.get(key) ?? 0) + 1)
     return first.mark
   }
   const marked = problem.pieces.some((piece) => piece.mark !== undefined)

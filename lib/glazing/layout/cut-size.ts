@@ -34,16 +34,16 @@ export function cutSize(
   const [across, along] = add[covering.joining]
   const cut = (opening: number, more: number): number =>
     round(Math.max(opening * (1 - grow) + more, opening / 2))
-  const length = (of: number): number => (of === 0 && covering.joining !== 'channel' ? 0 : cut(of, along))
-  const size = {
-    width: cut(blank.width, across),
-    length: length(blank.length),
-    left: length(blank.left),
-    right: length(blank.right),
-  }
-  return blank.rise === undefined || size.left === size.right
-    ? size
-    : { ...size, rise: round(size.right - size.left) }
+  const length = (of: number, more = 0): number =>
+    of === 0 && covering.joining !== 'channel' ? 0 : cut(of, along + more)
+  const size = { width: cut(blank.width, across), length: length(blank.length) }
+  if (blank.rise === undefined || covering.joining === 'channel')
+    return { ...size, left: length(blank.left), right: length(blank.right) }
+  // The slant keeps its slope: what goes off (or on) at a joint takes its share of the rise with it.
+  const lift = ((blank.rise / blank.width) * across) / Math.max(1, beside)
+  const left = length(blank.left, panel.leftJoint ? -lift : 0)
+  const right = length(blank.right, panel.rightJoint ? lift : 0)
+  return { width: size.width, length: Math.max(left, right), left, right, rise: round(right - left) }
 }
 
 /** What the profile has to hold at the lowest temperature, and what it then holds, at the ends of the longest piece. */

@@ -88,14 +88,14 @@ export interface Blank {
 export function blankOf(panel: Polygon, surface: Polygon): Blank {
   const at = boundsOf(panel)
   const tolerance = 1e-9 * Math.max(1, at.top - at.bottom, at.right - at.left)
-  const end = (u: number): number => {
-    const high = heightsAt(surface, u, tolerance)?.[1] ?? at.top
-    return Math.min(at.top, Math.max(at.bottom, high))
-  }
-  // Inside by a hair, so that an upright edge of the surface does not stand for what lies beside it.
-  const hair = 4 * tolerance
-  const [left, right] = [end(at.left + hair), end(at.right - hair)]
-  const middle = end((at.left + at.right) / 2)
+  const high = (u: number): number => heightsAt(surface, u)?.[1] ?? at.top
+  const clamp = (v: number): number => Math.min(at.top, Math.max(at.bottom, v))
+  // From inside by a hair, so that an upright edge of the surface does not stand for what lies beside it.
+  const hair = 1e-6 * (at.right - at.left)
+  const end = (u: number, inwards: number): number =>
+    clamp(2 * high(u + inwards * hair) - high(u + 2 * inwards * hair))
+  const [left, right] = [end(at.left, 1), end(at.right, -1)]
+  const middle = clamp(high((at.left + at.right) / 2))
   const steep = Math.abs(right - left) > 1e3 * tolerance
   const straight =
     Math.abs(middle - (left + right) / 2) <= 1e2 * tolerance &&
