@@ -27,7 +27,7 @@ export default defineConfig({
           setupFiles: ['tests/_support/database-file.ts'],
           pool: 'forks',
           maxWorkers: 2,
-          testTimeout: 30_000,
+          testTimeout: 90_000,
           hookTimeout: 60_000,
           sequence: { groupOrder: 1 },
         },
