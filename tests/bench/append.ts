@@ -5,6 +5,7 @@ import { appendOperations } from '@/db/access/append'
 import { closeDatabase } from '@/db/connection'
 import { withClient } from '@/db/server/sql.mjs'
 import { type Operation, toJson } from '@/lib/workbook'
+import { withCleanup } from './cleanup'
 import { generateWorkbook } from './generated-workbook'
 import type { Say } from './main'
 import { pgbench } from './pgbench'
@@ -28,9 +29,11 @@ const firm = uuid('firm')
 const member = uuid('member')
 
 /** One saved edit against the fastest that this PostgreSQL inserts one row, each its own durable transaction. */
-export async function run(say: Say): Promise<Line[]> {
-  const database = await startThrowawayDatabase('append')
-  try {
+export function run(say: Say): Promise<Line[]> {
+  return withCleanup(async (later) => {
+    const database = await startThrowawayDatabase('append')
+    later(database.stop)
+    later(closeDatabase)
     await prepare(database)
     const lines: Line[] = []
     for (const clients of clientCounts) {
@@ -47,10 +50,7 @@ export async function run(say: Say): Promise<Line[]> {
       )
     }
     return lines
-  } finally {
-    await closeDatabase()
-    await database.stop()
-  }
+  })
 }
 
 function line(

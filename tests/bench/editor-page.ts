@@ -33,6 +33,18 @@ export async function goToCell(page: Page, workbook: Workbook, place: Place): Pr
   await page.keyboard.press('Enter')
   await page.getByRole('region', { name: `${title} cells` }).waitFor()
   await page.getByLabel(`Input of ${name}`, { exact: true }).waitFor()
+  await focusGrid(page)
+}
+
+/** F6 goes round the parts of the screen, until the cells have the focus. */
+async function focusGrid(page: Page): Promise<void> {
+  const focused = page.locator('[data-region="grid"]:focus-within')
+  for (let tries = 0; tries < 8; tries++) {
+    await page.waitForTimeout(300)
+    if ((await focused.count()) > 0) return
+    await page.keyboard.press('F6')
+  }
+  throw new Error('the grid cannot be reached with F6')
 }
 
 /** Types a number over the selected cell; Enter is for the caller to press. */

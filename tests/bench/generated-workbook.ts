@@ -164,7 +164,8 @@ function sheetOf(id: string, name: string, kind: Sheet['kind'], rows: CellInput[
     name,
     kind,
     rowCount: rows.length,
-    columns: (rows[0] ?? []).map(() => ({ width: 110 })),
+    // Narrow enough for all of a take-off sheet's columns to be on the screen: what is not there is not painted.
+    columns: (rows[0] ?? []).map(() => ({ width: rows[0]?.length === lineColumns.length ? 92 : 130 })),
     rows: rows.map((inputs, row) => inputs.map((input) => cell(input, row))),
   }
 }

@@ -1,4 +1,5 @@
 import { cpus, loadavg } from 'node:os'
+import { stopAll } from './cleanup'
 import { type Line, printLines } from './report'
 
 /** Loaded only when they run: a section that is not asked for costs nothing. */
@@ -44,4 +45,7 @@ function busy(): boolean {
   return (loadavg()[1] ?? 0) > cpus().length + 1
 }
 
+for (const signal of ['SIGINT', 'SIGTERM'] as const) {
+  process.once(signal, () => void stopAll().then(() => process.exit(1)))
+}
 void main()

@@ -30,12 +30,17 @@ export async function addProbe(context: BrowserContext): Promise<void> {
   await context.addInitScript({ path: join(projectRoot, 'tests/bench/page-probe.js') })
 }
 
-/** Begins to wait for a number to be painted; ask before the act that brings it. */
-export function painted(page: Page, number: number, within: number): Promise<Painted> {
-  return page.evaluate(
+/** Begins to wait for a number to be painted; ask before the act that brings it. Rejects after a minute without it. */
+export async function painted(page: Page, number: number, within: number): Promise<Painted> {
+  let timer: NodeJS.Timeout | undefined
+  const late = new Promise<never>((_, reject) => {
+    timer = setTimeout(() => reject(new Error(`${number} was not painted within a minute`)), 60_000)
+  })
+  const seen = page.evaluate(
     ({ number, within }) => (globalThis as never as Probed).probe.painted(number, within),
     { number, within },
   )
+  return Promise.race([seen, late]).finally(() => clearTimeout(timer))
 }
 
 /** When a number first stood on the screen, in milliseconds since the page was asked for. */
