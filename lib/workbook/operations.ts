@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { quantities } from '../units/quantities'
+import { quantities, unitSystems } from '../units/quantities'
 import { limits } from './limits'
 
 /**
@@ -66,6 +66,8 @@ export const operationSchema = z.discriminatedUnion('kind', [
     kind: z.literal('set-cells'),
     sheet: sheetId,
     cells: z.array(cellPatchSchema).min(1).max(limits.cellsInOperation),
+    /** The system that the numbers are written in, where that is not the workbook's any more; absent, they are in the workbook's. */
+    system: z.enum(unitSystems).optional(),
   }),
   /** New blank rows or columns; the first of them gets the index `at`. */
   z.strictObject({
@@ -129,6 +131,18 @@ export const operationSchema = z.discriminatedUnion('kind', [
     sheet: sheetId,
     rowCount: z.int().min(1).max(limits.rows),
     columnCount: z.int().min(1).max(limits.columns),
+  }),
+  /**
+   * Writes every number of a quantity, and the cell called `unit_system`, in the other system. `exact` are numbers as they stood
+   * there before, for those few that converting does not bring back to the last bit; an entry that says anything else is passed over.
+   */
+  z.strictObject({
+    kind: z.literal('convert-units'),
+    system: z.enum(unitSystems),
+    exact: z
+      .array(z.strictObject({ sheet: sheetId, row: rowIndex, column: columnIndex, value: z.number() }))
+      .max(limits.cells)
+      .optional(),
   }),
   /** Widths and quantities of columns, by index. */
   z.strictObject({

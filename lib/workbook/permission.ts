@@ -11,6 +11,7 @@ export type Role = 'owner' | 'manager' | 'estimator' | 'viewer'
  * W18 A viewer changes nothing.
  * W19 An estimator does not change a locked sheet: cells, lines, columns, its name and place, the names that stand on it.
  *     Formulas on other sheets may read it, and a structural change elsewhere may rewrite its references.
+ * W36 Converting the units is a change of notation, not of what is locked: an estimator may, whatever is locked.
  * W20 A manager and an owner may.
  */
 export function refusal(workbook: Workbook, operation: Operation, role: Role): Failure | undefined {
@@ -44,6 +45,7 @@ function locked(sheet: Sheet, lock: string): Failure {
 function sheetsChangedBy(workbook: Workbook, operation: Operation): string[] {
   switch (operation.kind) {
     case 'add-sheet':
+    case 'convert-units':
       return []
     case 'name-value': {
       const before = workbook.names.get(operation.name)?.area.sheet

@@ -2,6 +2,7 @@ import { assertNever, type Result, succeed } from '../../failures'
 import type { Applied, CellAddress } from '../contracts'
 import type { Workbook } from '../model'
 import type { Operation } from '../operations'
+import { applyConvertUnits } from './convert-units'
 import { applySetColumns, applySetExtent } from './extent'
 import { applyInsertLines, applyMoveLines, applyRemoveLines } from './lines'
 import { applyNameValue } from './names'
@@ -34,6 +35,8 @@ export function applyOperation(workbook: Workbook, operation: Operation): Result
       return applyNameValue(workbook, operation)
     case 'set-extent':
       return applySetExtent(workbook, operation)
+    case 'convert-units':
+      return applyConvertUnits(workbook, operation)
     case 'set-columns':
       return applySetColumns(workbook, operation)
     default:

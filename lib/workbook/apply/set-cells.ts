@@ -5,10 +5,13 @@ import { formulaBounds } from '../formula/bounds'
 import { limits } from '../limits'
 import { type Cell, type CellInput, isFormula, type Row, type Sheet } from '../model'
 import type { CellPatch, Operation } from '../operations'
+import { convertNumber, quantityOf } from './convert-number'
+import { systemWords } from './convert-units'
 import { type Apply, countAll, countCells, findSheet, keepCount, setCells } from './parts'
 
 /**
  * W10 A cell's absent parts stay, `null` clears a part, a cell without parts is gone. A later patch of one cell comes after an earlier.
+ * W35 Numbers said to be in the other system are converted by the quantity that the cell has once it is set.
  * W11 Writing beyond the extent grows it, up to the limits.
  */
 export const applySetCells: Apply<'set-cells'> = (workbook, operation) => {
@@ -25,7 +28,16 @@ export const applySetCells: Apply<'set-cells'> = (workbook, operation) => {
       lastColumn = Math.max(lastColumn, patch.column)
     }
   }
-  const plan = planCells(sheet, operation.cells)
+  const { system: written = workbook.system } = operation
+  const plan = planCells(sheet, operation.cells, (value, cell, column) =>
+    convertNumber(value, quantityOf(cell, sheet, column), written, workbook.system),
+  )
+  if (written !== workbook.system) {
+    for (const { after } of plan.cells.values()) {
+      if (typeof after?.input !== 'number' || Number.isFinite(after.input)) continue
+      return fail('limit', `A number is too large to be written in ${systemWords[workbook.system]}.`)
+    }
+  }
   const total = countAll(workbook) + plan.added
   if (plan.added > 0 && total > limits.cells) {
     return fail('limit', `This would make ${total} cells; a workbook holds at most ${limits.cells}.`)
@@ -84,13 +96,19 @@ function clearsOnly(patch: CellPatch): boolean {
   )
 }
 
-function planCells(sheet: Sheet, patches: readonly CellPatch[]): Plan {
+type Convert = (value: number, cell: Cell | undefined, column: number) => number
+
+function planCells(sheet: Sheet, patches: readonly CellPatch[], convert: Convert): Plan {
   const plan: Plan = { cells: new Map(), added: 0 }
   for (const patch of patches) {
     const key = patch.row * limits.columns + patch.column
     const planned = plan.cells.get(key)
     const before = planned ? planned.before : sheet.rows[patch.row]?.[patch.column]
-    const after = patched(planned ? planned.after : before, patch)
+    let after = patched(planned ? planned.after : before, patch)
+    if (typeof patch.input === 'number' && typeof after?.input === 'number') {
+      const input = convert(after.input, after, patch.column)
+      if (input !== after.input) after = { ...after, input }
+    }
     plan.cells.set(key, { patch: planned ? { ...planned.patch, ...patch } : patch, before, after })
   }
   for (const { before, after } of plan.cells.values()) {

@@ -214,6 +214,9 @@ class WatchedEngine implements EngineClient {
 
 function changesContent(operation: Operation): boolean {
   return (
-    operation.kind === 'remove-sheet' || operation.kind === 'remove-lines' || operation.kind === 'set-cells'
+    operation.kind === 'remove-sheet' ||
+    operation.kind === 'remove-lines' ||
+    operation.kind === 'set-cells' ||
+    operation.kind === 'convert-units'
   )
 }

@@ -90,6 +90,7 @@ function change(
   }
   switch (operation.kind) {
     case 'set-cells':
+    case 'convert-units':
       setFromModel(follower, touched)
       return
     case 'add-sheet': {

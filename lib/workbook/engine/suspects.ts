@@ -18,6 +18,7 @@ export function placeOf(workbook: WorkbookJson, operations: readonly Operation[]
   if (!last) return ''
   const cell = suspectCell(operations) ?? suspectCell([last], () => true)
   if (cell) return `${sheetName(workbook, cell.sheet)} ${cellName(cell.patch.row, cell.patch.column)}`
+  if (last.kind === 'convert-units') return ''
   return last.kind === 'name-value' ? last.name : sheetName(workbook, last.sheet)
 }
 

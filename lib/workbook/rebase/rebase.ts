@@ -82,6 +82,8 @@ function crossOne(
 }
 
 function lostPart(operation: Operation, moved: readonly Operation[]): boolean {
+  // Units that somebody else converted at the same time are what was asked for.
+  if (operation.kind === 'convert-units') return false
   if (moved.length === 0) return true
   if (operation.kind !== 'set-cells') return false
   const kept = moved.reduce((sum, each) => sum + (each.kind === 'set-cells' ? each.cells.length : 0), 0)
@@ -90,15 +92,16 @@ function lostPart(operation: Operation, moved: readonly Operation[]): boolean {
 
 /**
  * Two neighbouring operations as one that does the same, or undefined when they cannot be one:
- * only `set-cells` of one sheet, within the limit of cells.
+ * only `set-cells` of one sheet, written in one system, within the limit of cells.
  */
 export function squash(a: Operation, b: Operation): Operation | undefined {
   if (a.kind !== 'set-cells' || b.kind !== 'set-cells' || a.sheet !== b.sheet) return undefined
+  if (a.system !== b.system) return undefined
   const merged = new Map<number, CellPatch>()
   for (const cell of [...a.cells, ...b.cells]) {
     const key = cell.row * limits.columns + cell.column
     merged.set(key, { ...merged.get(key), ...cell })
   }
   if (merged.size > limits.cellsInOperation) return undefined
-  return { kind: 'set-cells', sheet: a.sheet, cells: [...merged.values()] }
+  return { ...a, cells: [...merged.values()] }
 }

@@ -12,6 +12,7 @@ import { linesOver, type Side } from './lines'
  *
  * W27 Cells, columns and names follow the lines they stand on; formula texts that are being set follow as formulas do (W1 to W9).
  * W28 What stands on a line or a sheet that is gone, goes.
+ * W37 Numbers being set while somebody converts the units are in the system they were typed in. Two conversions at once are one.
  * W29 On one cell or one name the later in the log stands.
  */
 export function transform(
@@ -20,6 +21,8 @@ export function transform(
   sheets: readonly SheetGround[],
   side: Side,
 ): Operation[] {
+  if (operation.kind === 'convert-units') return convertOver(operation, other)
+  if (other.kind === 'convert-units') return [inSystemBefore(operation, other)]
   const moved = isLineOperation(other)
     ? overLines(operation, other, side)
     : other.kind === 'remove-sheet'
@@ -28,7 +31,32 @@ export function transform(
   return moved.map((each) => (each.kind === 'set-cells' ? withFormulas(each, other, sheets) : each))
 }
 
-function overLines(operation: Operation, other: LineOperation, side: Side): Operation[] {
+type Convert = OperationOf<'convert-units'>
+
+/** The numbers that a conversion brings back keep to their cells; both convert from one state, so two mean the same. */
+function convertOver(operation: Convert, other: Operation): Convert[] {
+  if (other.kind === 'convert-units') return []
+  const { exact, ...bare } = operation
+  if (!exact) return [operation]
+  const followed = exact.flatMap((entry) => {
+    if (!('sheet' in other) || other.sheet !== entry.sheet) return [entry]
+    if (other.kind === 'remove-sheet') return []
+    if (!isLineOperation(other)) return [entry]
+    const line = lineAfter(lineChangeOf(other), entry[other.axis])
+    return line === undefined ? [] : [{ ...entry, [other.axis]: line }]
+  })
+  return [followed.length > 0 ? { ...bare, exact: followed } : bare]
+}
+
+function inSystemBefore(operation: Operation, other: Convert): Operation {
+  if (operation.kind !== 'set-cells' || operation.system !== undefined) return operation
+  if (!operation.cells.some(({ input }) => typeof input === 'number')) return operation
+  return { ...operation, system: other.system === 'us' ? 'si' : 'us' }
+}
+
+type NotConvert = Exclude<Operation, Convert>
+
+function overLines(operation: NotConvert, other: LineOperation, side: Side): Operation[] {
   const change = lineChangeOf(other)
   const { axis } = other
   if (operation.kind === 'name-value') {
@@ -69,7 +97,7 @@ function overLines(operation: Operation, other: LineOperation, side: Side): Oper
 }
 
 function overRemovedSheet(
-  operation: Operation,
+  operation: NotConvert,
   other: OperationOf<'remove-sheet'>,
   sheets: readonly SheetGround[],
 ): Operation[] {

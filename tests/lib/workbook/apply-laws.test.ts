@@ -52,7 +52,7 @@ describe('laws of operations', () => {
     fc.assert(
       fc.property(workbook, operation, (json, each) => {
         const book = fromJson(json)
-        if (each.kind === 'add-sheet' || each.kind === 'set-cells') return
+        if (each.kind === 'add-sheet' || each.kind === 'set-cells' || each.kind === 'convert-units') return
         const before = new Set(inputs(book))
         const applied = applyOperation(book, each)
         if (!applied.ok) return

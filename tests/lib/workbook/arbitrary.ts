@@ -62,11 +62,15 @@ export const patch: fc.Arbitrary<CellPatch> = fc.record(
   { requiredKeys: ['row', 'column'] },
 )
 
-export const setCellsOperation: fc.Arbitrary<Operation> = fc.record({
-  kind: fc.constant('set-cells' as const),
-  sheet,
-  cells: fc.array(patch, { minLength: 1, maxLength: 4 }),
-})
+export const setCellsOperation: fc.Arbitrary<Operation> = fc.record(
+  {
+    kind: fc.constant('set-cells' as const),
+    sheet,
+    cells: fc.array(patch, { minLength: 1, maxLength: 4 }),
+    system: fc.constantFrom('us' as const, 'si' as const),
+  },
+  { requiredKeys: ['kind', 'sheet', 'cells'] },
+)
 
 export const lineOperation: fc.Arbitrary<Operation> = fc.oneof(
   fc.record({ kind: fc.constant('insert-lines' as const), sheet, axis, at: line, count: few }),
@@ -128,12 +132,23 @@ export const columnsOperation: fc.Arbitrary<Operation> = fc.oneof(
   }),
 )
 
+/** A conversion; of the numbers that it says stood there, most do not fit and are passed over. */
+export const convertOperation: fc.Arbitrary<Operation> = fc.record(
+  {
+    kind: fc.constant('convert-units' as const),
+    system: fc.constantFrom('us' as const, 'us' as const, 'si' as const),
+    exact: fc.array(fc.record({ sheet, row, column, value: fc.double({ noNaN: true }) }), { maxLength: 2 }),
+  },
+  { requiredKeys: ['kind', 'system'] },
+)
+
 export const operation: fc.Arbitrary<Operation> = fc.oneof(
   { weight: 4, arbitrary: setCellsOperation },
   { weight: 5, arbitrary: lineOperation },
   { weight: 2, arbitrary: sheetOperation },
   { weight: 2, arbitrary: nameOperation },
   { weight: 1, arbitrary: columnsOperation },
+  { weight: 2, arbitrary: convertOperation },
 )
 
 /** A workbook of two sheets with generated cells (as JSON, so that a test cannot change what was generated); `Extra` and `Late` are named by formulas but not there. */
