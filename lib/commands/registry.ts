@@ -1,4 +1,5 @@
 import type { Command, CommandContext } from './command'
+import { convertCommands } from './convert-commands'
 import { editCommands } from './edit-commands'
 import { estimateCommands } from './estimate-commands'
 import { goToCommands } from './go-to-commands'
@@ -13,6 +14,7 @@ export const commands: readonly Command[] = [
   ...editCommands,
   ...sheetCommands,
   ...workbookCommands,
+  ...convertCommands,
   ...viewCommands,
   ...accountCommands,
 ]

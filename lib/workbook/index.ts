@@ -1,5 +1,7 @@
 export * from './address'
 export { applyAll, applyOperation } from './apply/apply-operation'
+export { quantityOf } from './apply/convert-number'
+export { systemWords } from './apply/convert-units'
 export { refusedName } from './apply/names'
 export * from './contracts'
 export {
@@ -12,6 +14,7 @@ export type { ClientPort, EngineReply, EngineRequest, ServerPort, TriedValues } 
 export * from './entry'
 export * from './formula/bounds'
 export * from './formula/scan'
+export { type QuantityWarning, quantityWarnings } from './kinds/warnings'
 export * from './limits'
 export * from './lookup'
 export * from './model'
