@@ -1,8 +1,11 @@
 import { randomUUID } from 'node:crypto'
+import { computed } from '../../lib/estimate/computed'
 import type { Result } from '../../lib/failures'
+import { fromJson } from '../../lib/workbook'
+import { createEngine } from '../../lib/workbook/engine'
 import { foundFirm } from '../access/firms'
 import { type Actor, actorOf, addMember, newMemberSchema, signIn, signOut } from '../access/members'
-import { createWorkbook } from '../access/workbooks'
+import { createWorkbook, openWorkbook, saveSnapshot } from '../access/workbooks'
 import demo from './demo.json'
 import { demoWorkbooks } from './demo-workbooks'
 
@@ -32,11 +35,23 @@ export async function seedDemo(): Promise<readonly string[]> {
   await as('estimator@larkfold.example', async (actor) => {
     for (const { id, ...request } of demoWorkbooks) {
       const created = await createWorkbook(actor, request, { now: () => new Date(), newId: () => id })
-      if (created.ok) made.push(`Made the workbook “${request.title}”`)
-      else if (created.failure.name !== 'id') throw new Error(`${request.title}: ${created.failure.text}`)
+      if (created.ok) {
+        await computeValues(actor, id)
+        made.push(`Made the workbook “${request.title}”`)
+      } else if (created.failure.name !== 'id') throw new Error(`${request.title}: ${created.failure.text}`)
     }
   })
   return made
+}
+
+/** The list shows its figures, and it opens with its values, from the first time on. */
+async function computeValues(actor: Actor, id: string): Promise<void> {
+  const { seq, snapshot } = value(await openWorkbook(actor, id))
+  const workbook = fromJson(snapshot.workbook)
+  const engine = createEngine(workbook)
+  const { values, tally } = computed(workbook, engine)
+  engine.destroy()
+  value(await saveSnapshot(actor, id, { seq, values, tally: { ...tally } }))
 }
 
 async function as(email: string, work: (actor: Actor) => Promise<void>): Promise<void> {

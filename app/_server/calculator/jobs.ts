@@ -1,5 +1,5 @@
-import type { UnitSystem } from '@/lib/units'
-import type { Operation, StoredValues, WorkbookJson } from '@/lib/workbook'
+import type { Computed } from '@/lib/estimate/computed'
+import type { Operation, WorkbookJson } from '@/lib/workbook'
 
 /** A workbook as it is stored: a snapshot and the operations that came after it. The child replays them. */
 export interface StoredState {
@@ -19,17 +19,8 @@ export type Job =
       readonly path: string
     }
 
-/** The figures that the list of workbooks shows, in the workbook's own units; null while one cannot be computed. */
-export interface TallyFigures {
-  readonly system: UnitSystem
-  readonly coveringArea: number | null
-  readonly designHeatLoss: number | null
-  readonly quotationTotal: number | null
-  readonly currency: string | null
-}
-
 export interface JobAnswers {
-  readonly values: { readonly values: StoredValues; readonly tally: TallyFigures }
+  readonly values: Computed
   readonly xlsx: { readonly bytes: number }
 }
 
