@@ -68,7 +68,7 @@ export interface HeadingLine {
   readonly kind: 'heading'
   readonly label: string
 }
-export type Severity = 'impossible' | 'error' | 'warning'
+export type Severity = 'impossible' | 'error' | 'warning' | 'note'
 /** A condition that should hold: "in order", or a sentence that says what is wrong. */
 export interface CheckLine {
   readonly kind: 'check'
@@ -77,7 +77,7 @@ export interface CheckLine {
   readonly formula: string
   /** The named value that a person would change to put it right. */
   readonly about: string
-  /** An impossible house is refused; an error must be put right before work goes on; a warning is to be looked at. */
+  /** An impossible house is refused; an error must be put right before work goes on; a warning is to be looked at, a note to be known. */
   readonly severity: Severity
   readonly source: string
   readonly note?: string

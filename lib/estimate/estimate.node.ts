@@ -106,7 +106,10 @@ function summary({ report }: Estimate): string {
     const shown = typeof value === 'number' ? value.toLocaleString('en', { maximumFractionDigits: 2 }) : value
     return `${name.padEnd(20)} ${shown} ${unit}`.trimEnd()
   })
-  return [...lines, ...report.warnings.map(({ name, message }) => `warning: ${name}: ${message}`)].join('\n')
+  return [
+    ...lines,
+    ...report.warnings.map(({ severity, name, message }) => `${severity}: ${name}: ${message}`),
+  ].join('\n')
 }
 
 main().then(

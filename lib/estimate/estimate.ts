@@ -7,6 +7,7 @@ import { inOrder } from './declare'
 import { isRecord } from './json'
 import { nearest, quoted } from './nearest'
 import { lineNames, templateChecks } from './template'
+import { uncomputed, type Warning, warningsOf } from './warnings'
 
 export interface EstimatedValue {
   readonly value: Plain | readonly Plain[]
@@ -18,7 +19,7 @@ type Plain = number | string | boolean | null
 export interface EstimateReport {
   readonly unit_system: UnitSystem
   readonly values: Readonly<Record<string, EstimatedValue>>
-  readonly warnings: readonly { readonly name: string; readonly message: string }[]
+  readonly warnings: readonly Warning[]
 }
 
 export interface Estimate {
@@ -87,27 +88,21 @@ function reader(workbook: Workbook, engine: Engine): Read {
 /** Every named value but tables and their columns; a value that could not be computed is null, with a warning that says why. */
 function reportOf(workbook: Workbook, read: Read, engine: Engine): EstimateReport {
   const values: Record<string, EstimatedValue> = {}
-  const warnings: { name: string; message: string }[] = []
+  const warnings: Warning[] = []
   const currency = String(read('currency')[0] ?? '')
   for (const named of workbook.names.values()) {
     if (named.role === 'table' || named.name === 'unit_system') continue
     const plain = read(named.name).map((value) => {
-      if (!isCellError(value)) return value
-      warnings.push({ name: named.name, message: value.text })
-      return null
+      const warning = uncomputed(workbook, named, value)
+      if (warning) warnings.push(warning)
+      return isCellError(value) ? null : value
     })
     values[named.name] = {
       value: plain.length === 1 ? (plain[0] ?? null) : plain,
       unit: unitText(named, workbook.system, currency, engine),
     }
   }
-  for (const { name, about, severity } of templateChecks) {
-    const says = read(name)[0]
-    if (severity !== 'impossible' && typeof says === 'string' && says !== inOrder) {
-      warnings.push({ name: about, message: says })
-    }
-  }
-  return { unit_system: workbook.system, values, warnings }
+  return { unit_system: workbook.system, values, warnings: [...warnings, ...warningsOf(workbook, read)] }
 }
 
 /** A line's unit stands beside it, as text or formula; a column's is its kind's. The unit of a ratio is 1. */

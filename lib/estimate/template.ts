@@ -12,10 +12,14 @@ import { sun } from './sheets/sun'
 import { surfaces } from './sheets/surfaces'
 import { takeOff } from './sheets/take-off'
 import { weather } from './sheets/weather'
+import { allowableLoads } from './tables/allowable-loads'
 import { coverings } from './tables/coverings'
+import { freight, longLoads } from './tables/freight'
 import { fuels } from './tables/fuels'
+import { heaters } from './tables/heaters'
 import { crops, tightness } from './tables/reference'
 import { sheetsInStock } from './tables/sheets-in-stock'
+import { sites } from './tables/sites'
 import { fixings, labour, profiles } from './tables/supplies'
 
 /** The steps in the order of the work. */
@@ -42,8 +46,13 @@ export const tables: readonly SheetDeclaration[] = [
   fixings,
   labour,
   fuels,
+  heaters,
   crops,
+  sites,
   tightness,
+  freight,
+  longLoads,
+  allowableLoads,
 ]
 
 /** What is known of an input before there is a workbook. */

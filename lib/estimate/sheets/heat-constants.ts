@@ -94,4 +94,12 @@ export const balanceConstants: readonly Line[] = [
     source: 'the workbook’s own',
     note: 'Keeps the correlation away from none, in months that are hot.',
   }),
+  constant({
+    name: 'hitchin_spread',
+    label: 'Spread in Hitchin’s formula',
+    quantity: 'temperature-difference',
+    digits: 3,
+    value: si(1 / 0.71),
+    source: 'CIBSE TM41, from memory: 1/0.71 K',
+  }),
 ]

@@ -106,6 +106,15 @@ export const heatMonthColumns: readonly GridColumn[] = [
     source: erbs,
     named: area('month_degree_days', 'monthly degree-days'),
   },
+  {
+    title: 'By Hitchin',
+    quantity: 'degree-days',
+    digits: 0,
+    formula:
+      '=[Days]*IF(ABS(degree_day_base-[Outside])<0.000001,hitchin_spread,(degree_day_base-[Outside])/(1-EXP(-(degree_day_base-[Outside])/hitchin_spread)))',
+    source: 'CIBSE TM41, from memory',
+    named: area('month_hitchin_degree_days', 'monthly degree-days by Hitchin'),
+  },
 ]
 
 export const heatMonthRows: readonly GridRow[] = months.map((month) => ({ Month: month }))

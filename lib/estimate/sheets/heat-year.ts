@@ -160,10 +160,25 @@ export const yearLines: readonly Line[] = [
     source: 'definition',
   }),
   computed({
+    name: 'degree_day_fuel_cost',
+    label: 'Fuel cost by degree-days',
+    quantity: 'money',
+    formula: '=degree_day_fuel_quantity*fuel_price',
+    source: 'definition',
+  }),
+  computed({
     name: 'degree_day_difference',
     label: 'Against the monthly balance',
     quantity: 'ratio',
     formula: '=IF(annual_heat_demand=0,0,degree_day_heat/annual_heat_demand-1)',
     source: 'definition',
+  }),
+  computed({
+    name: 'hitchin_degree_days',
+    label: 'Heating degree-days, by Hitchin',
+    quantity: 'degree-days',
+    formula: '=SUM(month_hitchin_degree_days)',
+    source: 'CIBSE TM41, from memory',
+    note: 'A shorter formula from the same means, to hold the other against.',
   }),
 ]

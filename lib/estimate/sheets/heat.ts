@@ -49,7 +49,7 @@ export const heat: SheetDeclaration = {
         value: 0,
         limits: { min: 0, max: 1000 },
         source: 'estimator’s choice',
-        note: '0 without a screen; Surfaces says which ones it covers.',
+        note: '0 without a screen; Surfaces says which ones it covers. From published U-values: a blanket adds 0.4 to 0.5 under a single layer, 1.1 under double film.',
       }),
       input({
         name: 'heater_allowance',
@@ -110,6 +110,23 @@ export const heat: SheetDeclaration = {
         quantity: 'heat-rate',
         formula: '=design_heat_loss*(1+heater_allowance)',
         source: 'common practice, no source',
+      }),
+      computed({
+        name: 'heater_count',
+        label: 'Heaters',
+        quantity: 'count',
+        formula: '=MAX(1,ROUNDUP(ROUND(heater_output/MAX(heater_outputs),9),0))',
+        source: 'Heaters: as few as the largest allows',
+      }),
+      computed({
+        name: 'heater_size',
+        label: 'Size of each',
+        quantity: 'heat-rate',
+        // The least of the sizes that is not under what each has to give, whatever the order of the table.
+        formula:
+          '=SMALL(heater_outputs,1+COUNTIF(heater_outputs,"<"&ROUND(heater_output/heater_count*(1-0.000000001),6)))',
+        source: 'Heaters: the smallest size that is enough',
+        total: true,
       }),
       heading('Fuel'),
       input({

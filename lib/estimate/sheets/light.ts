@@ -173,6 +173,41 @@ export const light: SheetDeclaration = {
         source: 'below',
         total: true,
       }),
+      heading('Lamps, where the sun falls short'),
+      input({
+        name: 'lamp_hours',
+        label: 'Hours of lamps, a day',
+        quantity: 'hours',
+        value: 16,
+        limits: { above: 0, max: 24 },
+        source: 'estimator’s choice',
+      }),
+      constant({
+        name: 'photon_seconds',
+        label: 'Moles in an hour of a micromole a second',
+        quantity: 'number',
+        digits: 4,
+        value: 0.0036,
+        source: '3600 s and 10⁻⁶',
+      }),
+      computed({
+        name: 'light_shortfall',
+        label: 'Light wanting in the darkest month',
+        quantity: 'daily-light',
+        digits: 1,
+        formula: '=MAX(0,daily_light_target-darkest_month_light)',
+        source: 'target less light',
+      }),
+      computed({
+        name: 'lamp_photon_flux',
+        label: 'Lamps at the crop that make it up',
+        quantity: 'number',
+        digits: 0,
+        unit: 'µmol/(m²·s)',
+        formula: '=light_shortfall/(lamp_hours*photon_seconds)',
+        source: 'definition; Purdue HO-238-W',
+      }),
+      heading('Check'),
       check({
         name: 'light_check',
         label: 'Light for the crop',
@@ -181,6 +216,15 @@ export const light: SheetDeclaration = {
         formula:
           '=IF(darkest_month_light<daily_light_target,"In the darkest month there is less light than the crop asks for","in order")',
         source: 'Crops',
+      }),
+      check({
+        name: 'clear_covering_check',
+        label: 'Clear covering over crops',
+        about: 'roof_covering',
+        severity: 'note',
+        formula:
+          '=IF(light_quality="clear","The roof covering is clear: light is direct and casts hard shade; most crops do better under a diffusing one","in order")',
+        source: 'common practice, no source',
       }),
       check({
         name: 'scorch_check',

@@ -115,9 +115,24 @@ const optionColumns: readonly GridColumn[] = [
     source: `${handbook}: UPV*`,
   },
   {
+    title: 'Upkeep a year',
+    quantity: 'money',
+    ground: 'input',
+    source: 'washing, patching, tightening; 0 unless typed',
+    named: area('option_upkeep', 'upkeep of each option, a year'),
+  },
+  {
+    title: 'Left at the end',
+    quantity: 'money',
+    ground: 'input',
+    source: 'what the covering is worth after the years looked at; 0 unless typed',
+    named: area('option_left', 'what is left of each option at the end'),
+  },
+  {
     title: 'Life-cycle cost',
     quantity: 'money',
-    formula: '=[First cost]+[Renewals today]+[Heat today]',
+    formula:
+      '=[First cost]+[Renewals today]+[Heat today]+[Upkeep a year]*upkeep_present_factor-[Left at the end]*end_present_factor',
     source: handbook,
     named: area('option_life_cycle', 'life-cycle cost of each option'),
   },
@@ -135,6 +150,8 @@ const optionColumns: readonly GridColumn[] = [
 const optionRows: readonly GridRow[] = [...compared, '=roof_covering'].map((code, row) => ({
   Option: optionName(row),
   Covering: row === own ? { value: code, ground: 'label' } : code,
+  'Upkeep a year': 0,
+  'Left at the end': 0,
 }))
 
 const roofSum = (of: string, more = ''): string => `=SUMIFS(${of},surface_part,"roof"${more})`
@@ -189,6 +206,22 @@ export const options: SheetDeclaration = {
         formula:
           '=IF(ABS(fuel_growth-1)<0.000000001,study_years,fuel_growth*(1-fuel_growth^study_years)/(1-fuel_growth))',
         source: `${handbook}: UPV*`,
+      }),
+      computed({
+        name: 'upkeep_present_factor',
+        label: 'Years of upkeep, today',
+        quantity: 'number',
+        digits: 3,
+        formula: '=IF(discount_rate<0.0000001,study_years,(1-(1+discount_rate)^-study_years)/discount_rate)',
+        source: `${handbook}: UPV`,
+      }),
+      computed({
+        name: 'end_present_factor',
+        label: 'Money at the end, today',
+        quantity: 'number',
+        digits: 3,
+        formula: '=(1+discount_rate)^-study_years',
+        source: `${handbook}: SPV`,
       }),
       computed({
         name: 'labour_by_area',

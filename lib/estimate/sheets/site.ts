@@ -1,4 +1,5 @@
-import { grid, input, lines, type SheetDeclaration } from '../declare'
+import { grid, input, lines, lookUp, type SheetDeclaration } from '../declare'
+import { irradiationOf, meanOf } from '../tables/sites'
 
 const demo = 'invented (demo)'
 
@@ -17,8 +18,8 @@ export const months = [
   'December',
 ] as const
 
-const meanTemperature = [24, 27, 36, 48, 59, 68, 73, 71, 63, 52, 40, 29]
-const irradiation = [570, 830, 1140, 1440, 1740, 1900, 1880, 1640, 1300, 910, 600, 480]
+const ofSite = (column: string): string => `=${lookUp('sites', 'site_code', column)}`
+const fromSites = 'Sites, unless typed here'
 const reflectance = [0.4, 0.4, 0.3, 0.2, 0.2, 0.2, 0.2, 0.2, 0.2, 0.2, 0.2, 0.3]
 
 export const site: SheetDeclaration = {
@@ -29,21 +30,30 @@ export const site: SheetDeclaration = {
   blocks: [
     lines(
       input({
+        name: 'site_code',
+        label: 'Climate of',
+        quantity: 'text',
+        value: 'MIDDLEFOLD',
+        choices: 'sites',
+        source: 'estimator’s choice',
+        note: 'Fills latitude, elevation, design temperature, snow, wind and the months, each unless typed over.',
+      }),
+      input({
         name: 'latitude',
         label: 'Latitude',
         quantity: 'angle',
-        value: 42,
+        value: ofSite('latitude'),
         limits: { min: -66, max: 66 },
-        source: demo,
+        source: fromSites,
         note: 'North is positive.',
       }),
       input({
         name: 'site_elevation',
         label: 'Elevation of the site',
         quantity: 'length',
-        value: 500,
+        value: ofSite('elevation'),
         limits: { min: -500, max: 6000, in: 'si' },
-        source: demo,
+        source: fromSites,
       }),
       input({
         name: 'ridge_azimuth',
@@ -58,9 +68,9 @@ export const site: SheetDeclaration = {
         name: 'outside_design_temperature',
         label: 'Outside design temperature',
         quantity: 'temperature',
-        value: 0,
+        value: ofSite('design temperature'),
         limits: { min: -60, max: 50, in: 'si' },
-        source: demo,
+        source: fromSites,
         note: 'The 99 % value of the nearest weather station is usual.',
       }),
       input({
@@ -83,18 +93,18 @@ export const site: SheetDeclaration = {
         name: 'ground_snow_load',
         label: 'Ground snow load',
         quantity: 'pressure',
-        value: 30,
+        value: ofSite('ground snow load'),
         limits: { min: 0, max: 20, in: 'si' },
-        source: demo,
+        source: fromSites,
         note: 'From the map of the local code.',
       }),
       input({
         name: 'basic_wind_speed',
         label: 'Basic wind speed',
         quantity: 'speed',
-        value: 105,
+        value: ofSite('wind speed'),
         limits: { min: 0, max: 120, in: 'si' },
-        source: demo,
+        source: fromSites,
         note: 'Three-second gust, from the map of the local code.',
       }),
     ),
@@ -138,9 +148,9 @@ export const site: SheetDeclaration = {
       ],
       rows: months.map((month, index) => ({
         Month: month,
-        'Mean temperature': meanTemperature[index] ?? 0,
-        Irradiation: irradiation[index] ?? 0,
-        Source: 'invented (demo), like 42° N inland',
+        'Mean temperature': ofSite(meanOf(month)),
+        Irradiation: ofSite(irradiationOf(month)),
+        Source: fromSites,
         'Ground reflectance': reflectance[index] ?? 0,
       })),
     }),

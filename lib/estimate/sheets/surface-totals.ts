@@ -1,4 +1,4 @@
-import { check, computed, heading, type Line } from '../declare'
+import { check, computed, constant, heading, type Line } from '../declare'
 
 /** Areas of heat, without overhang, and the conductance of all that is around the house. */
 export const surfaceTotals: readonly Line[] = [
@@ -89,5 +89,21 @@ export const surfaceTotals: readonly Line[] = [
     formula:
       '=IF(ABS(opening_area-SUM(surface_opening_area))>0.000001,"Expected every opening to name a surface of this sheet","in order")',
     source: 'the workbook’s own',
+  }),
+  constant({
+    name: 'u_value_tolerance',
+    label: 'U-value that counts as far from the table',
+    quantity: 'ratio',
+    value: 0.2,
+    source: 'common practice, no source',
+  }),
+  check({
+    name: 'u_value_check',
+    label: 'U-values near the table',
+    about: 'surface_u_value',
+    severity: 'warning',
+    formula:
+      '=IF(MAX(surface_u_off_table)>u_value_tolerance,"The U-value of a surface is far from its covering’s in the table","in order")',
+    source: 'Coverings',
   }),
 ]

@@ -127,6 +127,14 @@ export const surfaces: SheetDeclaration = {
           named: area('surface_conductance', 'conductances of the surfaces'),
         },
         {
+          title: 'Off the table',
+          quantity: 'ratio',
+          digits: 2,
+          formula: `=ABS([U-value]*(${lookUp('coverings', '[Covering]', 'resistance')}+IF([Screened]="yes",screen_resistance,0))-1)`,
+          source: 'how far the U-value is from that of its covering in the table',
+          named: area('surface_u_off_table', 'how far U-values are from the table'),
+        },
+        {
           title: 'Without screen',
           quantity: 'conductance',
           formula: '=[Net area]/[Resistance]',
@@ -203,6 +211,7 @@ export const surfaces: SheetDeclaration = {
           'Gross area': '=SUM(surface_knee_wall_area)',
           Covering: { ground: 'label' },
           Resistance: { value: '=knee_wall_resistance', ground: 'label' },
+          'Off the table': 0,
           Screened: { value: 'no' },
         },
       ],

@@ -82,6 +82,13 @@ const columns: readonly GridColumn[] = [
     formula: `=[Area bought]*${of('weight')}`,
     named: area('bought_weight', 'weights bought'),
   },
+  {
+    title: 'Carried',
+    quantity: 'length',
+    formula: `=IF(OR([Area needed]=0,${of('bending')}="freely"),0,IF([Sheet length]=0,[Piece],[Sheet length]))`,
+    source: 'length on the lorry; film goes in rolls',
+    named: area('carried_length', 'lengths that are carried'),
+  },
   { title: 'Joint profile', quantity: 'text', ground: 'table', formula: `=${of('joint profile')}` },
   {
     title: 'Joints',

@@ -7,6 +7,8 @@ export interface Computed {
   /** A named number; an error or a text fails the test with its words. */
   readonly number: (name: string) => number
   readonly numbers: (name: string) => readonly number[]
+  /** The numbers among the values of a name; of cells that hold none, nothing. */
+  readonly numbersOf: (name: string) => readonly number[]
   readonly text: (name: string) => string
   readonly value: (name: string) => CellValue
   readonly all: () => ReadonlyMap<string, readonly CellValue[]>
@@ -27,6 +29,8 @@ export interface Live extends Computed {
   readonly set: (inputs: Readonly<Record<string, InputValue>>) => void
   /** Types a number into a table's cell. */
   readonly setRow: (table: string, code: string, column: string, value: number) => void
+  /** Types into one cell of a named area, by its order. */
+  readonly setCell: (name: string, order: number, input: number | string) => void
   readonly close: () => void
 }
 
@@ -50,6 +54,7 @@ export function openLive(request: WorkbookRequest): Live {
     workbook,
     number: (name) => asNumber(values(name)[0], name),
     numbers: (name) => values(name).map((value) => asNumber(value, name)),
+    numbersOf: (name) => values(name).filter((value) => typeof value === 'number'),
     text: (name) => String(values(name)[0]),
     value: (name) => values(name)[0] ?? null,
     all: () => new Map([...workbook.names.keys()].map((name) => [name, values(name)])),
@@ -64,6 +69,12 @@ export function openLive(request: WorkbookRequest): Live {
       const row = codes.indexOf(code)
       if (row < 0 || at < 0) throw new Error(`no ${column} of ${code}`)
       const cell = { row: area.row + row, column: at, input: value }
+      engine.apply([{ kind: 'set-cells', sheet: area.sheet, cells: [cell] }])
+    },
+    setCell: (name, order, input) => {
+      const area = workbook.names.get(name)?.area
+      if (area?.columnCount !== 1) throw new Error(`no column ${name}`)
+      const cell = { row: area.row + order, column: area.column, input }
       engine.apply([{ kind: 'set-cells', sheet: area.sheet, cells: [cell] }])
     },
     close: () => engine.destroy(),

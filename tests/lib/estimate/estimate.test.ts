@@ -41,8 +41,12 @@ describe('the estimate of a request', () => {
       if (severity !== 'warning') expect(blank.values[name]?.value, name).toBe(inOrder)
     }
     const said = templateChecks.filter(({ name }) => blank.values[name]?.value !== inOrder)
-    expect(blank.warnings).toEqual(
-      said.map(({ name, about }) => ({ name: about, message: blank.values[name]?.value })),
+    expect(blank.warnings.map(({ name, message, severity }) => ({ name, message, severity }))).toEqual(
+      said.map(({ name, about, severity }) => ({
+        name: about,
+        message: blank.values[name]?.value,
+        severity,
+      })),
     )
   })
 
