@@ -178,6 +178,9 @@ function fitsBeside(pieces: readonly SheetPiece[], width: number, kerf: number):
   return a !== undefined && b !== undefined && a + kerf + b <= width * (1 + 1e-9)
 }
 
+/** A bound for many kinds of pieces may stay a little below the best one; it stays a bound. */
+const mostPricings = 80
+
 function widthBound(
   pieces: readonly SheetPiece[],
   stock: readonly SheetStock[],
@@ -200,7 +203,8 @@ function widthBound(
     if (counted.length === 0) continue
     const shifted = stock.map((sheet) => ({ ...sheet, length: sheet.length + kerf }))
     const instance = toInstance({ kerf: 0, stock: shifted, pieces: counted })
-    if (instance.ok) bound = Math.max(bound, stepUp(instance.value, relax(instance.value).bound))
+    if (instance.ok)
+      bound = Math.max(bound, stepUp(instance.value, relax(instance.value, { pricings: mostPricings }).bound))
   }
   return bound
 }

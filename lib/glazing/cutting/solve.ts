@@ -40,8 +40,9 @@ export function solveCutting(
   const relaxation = relax(instance, { start: distinctOf(best), pricer })
   let bound = stepUp(instance, relaxation.bound)
   const done = () => best !== undefined && costOf(instance, best) <= bound + slack(bound)
-  for (const dive of dives) {
-    if (done()) break
+  const near = () => best !== undefined && costOf(instance, best) <= bound * farOff
+  for (const [k, dive] of [...dives, ...moreDives].entries()) {
+    if (done() || (k >= dives.length && near())) break
     best = cheaper(instance, best, roundRelaxation(instance, relaxation, pricer, dive, bound + slack(bound)))
   }
   if (integerProgram && !done()) {
@@ -91,6 +92,13 @@ const dives: readonly Dive[] = [
   { together: 0.7, by: 'part', shuffles: 4 },
   { together: 1, by: 'filling', shuffles: 4 },
   { together: 0.5, by: 'filling', shuffles: 4 },
+]
+/** Small jobs can stay further off; there the search is cheap. */
+const farOff = 1.003
+const moreDives: readonly Dive[] = [
+  { together: 1, by: 'part', shuffles: 24 },
+  { together: 0.85, by: 'filling', shuffles: 24 },
+  { together: 0.6, by: 'part', shuffles: 24 },
 ]
 
 function distinctOf(bars: Bars | undefined): Pattern[] {

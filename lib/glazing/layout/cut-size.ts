@@ -37,7 +37,8 @@ export function cutSize(
   const length = (of: number, more = 0): number =>
     of === 0 && covering.joining !== 'channel' ? 0 : cut(of, along + more)
   const size = { width: cut(blank.width, across), length: length(blank.length) }
-  if (blank.rise === undefined || covering.joining === 'channel')
+  // Film is trimmed in place, and a lap lies beside the slant: neither shares its slanted cut.
+  if (blank.rise === undefined || covering.joining === 'channel' || covering.joining === 'lap')
     return { ...size, left: length(blank.left), right: length(blank.right) }
   // The slant keeps its slope: what goes off (or on) at a joint takes its share of the rise with it.
   const lift = ((blank.rise / blank.width) * across) / Math.max(1, beside)

@@ -112,6 +112,18 @@ describe('coverings', () => {
     expect(wall[0]?.width).toBeCloseTo(0.6 + 0.038, 9)
   })
 
+  it('[T3] a corrugated piece that just fits its sheet below a slant is not made longer by its lap', () => {
+    // 2.57 − 0.4 at the eave and 0.6 · 1.43 / 3 more at the first joint: 2.456 m out of sheets of 2.5 m.
+    const layout = layOut({
+      frame: { ...frame, eave: 2.57 },
+      coverings: [{ ...corrugated, stock: [{ width: 0.9, length: 2.5, price: 30 }] }],
+      coveringOf: everywhere('CORR'),
+    })
+    const [first] = layout.pieces.filter((piece) => piece.surface === 'Right end')
+    expect(first?.length).toBeGreaterThan(2.4)
+    expect(first?.length).toBeLessThanOrEqual(2.5)
+  })
+
   it('[T4] panes are no larger than their thickness carries, and overhead ones are to be safety glass', () => {
     const big = { ...glass, expansion: 0, stock: [{ width: 1, length: 3, price: 60 }] }
     const layout = layOut({ rafterSpacing: 1, coverings: [big], coveringOf: everywhere('GLASS-4') })
