@@ -103,6 +103,8 @@ export type Effect =
 export type ViewChange =
   | { readonly kind: 'select'; readonly selection: Selection }
   | { readonly kind: 'undo' | 'redo' | 'edit-cell' | 'edit-note' | 'copy' | 'cut' | 'paste' | 'export-xlsx' }
+  /** Every check that does not hold, missing input, cell in error and override, to go to. */
+  | { readonly kind: 'list-checks' }
   /** The palette, empty or with a command begun. */
   | { readonly kind: 'open-palette'; readonly command?: string }
   | { readonly kind: 'switch-theme' | 'toggle-drawing' | 'sign-out' | 'list-workbooks' }

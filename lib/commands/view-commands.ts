@@ -1,4 +1,4 @@
-import { always } from './availability'
+import { always, hasWorkbook } from './availability'
 import type { Command } from './command'
 
 export const viewCommands: readonly Command[] = [
@@ -12,6 +12,17 @@ export const viewCommands: readonly Command[] = [
     anywhere: true,
     when: always,
     run: () => ({ kind: 'view', change: { kind: 'open-palette' } }),
+  },
+  {
+    id: 'list-checks',
+    title: 'Things to look at',
+    synonyms: ['checks', 'warnings', 'errors', 'problems', 'missing', 'overrides', 'what is wrong'],
+    group: 'View',
+    keys: ['Alt+Shift+L'],
+    keysWork: 'everywhere',
+    when: hasWorkbook,
+    says: () => 'Lists warnings, missing inputs, errors and overrides; Enter goes to the cell.',
+    run: () => ({ kind: 'view', change: { kind: 'list-checks' } }),
   },
   {
     id: 'switch-theme',

@@ -48,8 +48,45 @@ describe('the state of a step', () => {
       read(sheet, { '3 1': { error: '#DIV/0!', text: 'divides by zero' } }),
     )
     expect(state.toLookAt).toBe(3)
-    expect(state.words).toEqual(['B3 is an override', 'B4 divides by zero', 'B2 is missing'])
-    expect(state.first).toEqual({ sheet: 'frame', row: 2, column: 1 })
+    expect(state.words).toEqual(['B4 divides by zero', 'B2 is missing: frame width', 'B3 is an override: R'])
+    expect(state.first).toEqual({ sheet: 'frame', row: 3, column: 1 })
+  })
+
+  it('does not miss a text or a date that says nothing, but a choice that was not made', () => {
+    const sheet = sheetOf([header, [{ input: 'Client' }, { ground: 'input' }]])
+    const named = (quantity: 'text' | 'date'): Workbook => ({
+      ...workbookOf(sheet),
+      names: new Map([['client', { ...width, name: 'client', quantity }]]),
+    })
+    for (const quantity of ['text', 'date'] as const)
+      expect(stepState(named(quantity), sheet, read(sheet)).toLookAt).toBe(0)
+    const chosen = sheetOf([header, [{ input: 'Use' }, { ground: 'input', format: { choices: ['a', 'b'] } }]])
+    expect(stepState(named('text'), chosen, read(chosen)).toLookAt).toBe(1)
+  })
+
+  it('counts checks that do not hold, by what the declarations say of them, and no notes', () => {
+    const sheet = sheetOf([
+      header,
+      [{ input: 'Light' }, { input: '=x' }],
+      [{ input: 'Bend' }, { input: '=y' }],
+    ])
+    const check = (name: string, row: number): [string, NamedValue] => [
+      name,
+      { ...width, name, quantity: 'text', role: 'result', area: { ...width.area, row } },
+    ]
+    const workbook: Workbook = { ...workbookOf(sheet), names: new Map([check('light', 1), check('bend', 2)]) }
+    const say = (light: string, bend: string) => read(sheet, { '1 1': light, '2 1': bend })
+    const book = (severity: string) => ({
+      inOrder: 'in order',
+      checks: new Map([
+        ['light', { about: 'light', severity: 'warning' }],
+        ['bend', { about: 'light', severity }],
+      ]),
+    })
+    expect(stepState(workbook, sheet, say('in order', 'in order'), book('error')).toLookAt).toBe(0)
+    const both = stepState(workbook, sheet, say('too dark', 'too tight'), book('error'))
+    expect(both.words).toEqual(['B3 too tight', 'B2 too dark'])
+    expect(stepState(workbook, sheet, say('in order', 'too tight'), book('note')).toLookAt).toBe(0)
   })
 
   it('a sheet with titles alone has no state yet', () => {

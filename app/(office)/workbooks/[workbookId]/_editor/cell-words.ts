@@ -18,18 +18,22 @@ import type { WorkbookSession } from './session-contract'
 /** What the entry line says about a cell besides its input. */
 export interface CellWords {
   readonly address: string
+  /** What the cell is called, and what its ground says. */
   readonly about: string
+  /** Its formula in words. */
+  readonly formula: string | undefined
   readonly error: string | undefined
   readonly note: string | undefined
   readonly unit: string
   readonly source: string
 }
 
-export function cellWords(session: WorkbookSession, address: CellAddress): CellWords {
+/** `typed` is what is being written into it, if anything is. */
+export function cellWords(session: WorkbookSession, address: CellAddress, typed?: string): CellWords {
   const { workbook } = session
   const sheet = sheetById(workbook, address.sheet)
   const name = cellName(address.row, address.column)
-  if (!sheet) return { address: name, about: '', error: undefined, note: undefined, unit: '', source: '' }
+  if (!sheet) return { ...nothing, address: name }
   const cell = sheet.rows[address.row]?.[address.column]
   const value = session.value(address)
   const named = namedAt(workbook, address).find(({ role }) => role !== 'table')
@@ -37,17 +41,44 @@ export function cellWords(session: WorkbookSession, address: CellAddress): CellW
   const ground = groundWords[groundOf(cell)]
   return {
     address: name,
-    about: [label, named?.name, ground, inWords(session, address, cell)].filter(Boolean).join(' · '),
+    about: [label, named?.name, ground].filter(Boolean).join(' · '),
+    formula: inWords(session, address, typed ?? cell?.input),
     error: isCellError(value) ? value.text : undefined,
-    note: cell?.note,
+    note: noteOf(session, sheet, address, cell),
     unit: unitWords(session, sheet, address),
-    source: columnText(session, sheet, address.row, /^source/i),
+    source: columnText(session, sheet, address.row, address.column, /^source/i),
   }
 }
 
 /** A formula in words, made of the names and titles around what it refers to. */
-function inWords(session: WorkbookSession, address: CellAddress, cell: Cell | undefined): string | undefined {
-  return isFormula(cell?.input) ? sayFormula(session.workbook, address, cell.input) : undefined
+function inWords(
+  session: WorkbookSession,
+  address: CellAddress,
+  input: Cell['input'] | undefined,
+): string | undefined {
+  return isFormula(input) ? sayFormula(session.workbook, address, input) : undefined
+}
+
+/** The cell's own note, else what the Note column says of its row, else the note on its column's header. */
+function noteOf(
+  session: WorkbookSession,
+  sheet: Sheet,
+  { row, column }: CellAddress,
+  cell: Cell | undefined,
+): string | undefined {
+  if (cell?.note) return cell.note
+  const ofRow = columnText(session, sheet, row, column, /^notes?$/i)
+  return ofRow === '' ? sheet.rows[0]?.[column]?.note : ofRow
+}
+
+const nothing: CellWords = {
+  address: '',
+  about: '',
+  formula: undefined,
+  error: undefined,
+  note: undefined,
+  unit: '',
+  source: '',
 }
 
 const groundWords = {
@@ -77,9 +108,10 @@ function labelAround(session: WorkbookSession, sheet: Sheet, { row, column }: Ce
   return [title, begins].filter(Boolean).join(', ')
 }
 
-function columnText(session: WorkbookSession, sheet: Sheet, row: number, title: RegExp): string {
+/** What the column of that title says of the row; nothing of its own cells. */
+function columnText(session: WorkbookSession, sheet: Sheet, row: number, of: number, title: RegExp): string {
   for (let column = 0; column < sheet.columns.length; column += 1) {
-    if (!title.test(textOf(session.value({ sheet: sheet.id, row: 0, column })))) continue
+    if (column === of || !title.test(textOf(session.value({ sheet: sheet.id, row: 0, column })))) continue
     return textOf(session.value({ sheet: sheet.id, row, column }))
   }
   return ''

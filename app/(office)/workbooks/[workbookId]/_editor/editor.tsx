@@ -13,6 +13,7 @@ import { Palette } from '../_palette/palette'
 import { Tally } from '../_tally/tally'
 import { commandContext } from './command-context'
 import { EntryLine } from './entry-line'
+import { type PanelShown, Panels } from './panels'
 import { PhoneSteps } from './phone-steps'
 import { runEffect, say, select } from './run-effect'
 import type { Session } from './session'
@@ -43,6 +44,7 @@ export function Editor({ session }: { readonly session: Session }) {
   const palette = usePalette()
   const workbooks = useWorkbooks(session.id, palette.open)
   const [note, setNote] = useState(false)
+  const [panel, setPanel] = useState<PanelShown | undefined>(undefined)
 
   const reach = useMemo(
     () => ({
@@ -50,6 +52,7 @@ export function Editor({ session }: { readonly session: Session }) {
       view,
       editing,
       openPalette: palette.show,
+      openPanel: setPanel,
       editNote: () => setNote(true),
       goTo: (address: string) => router.push(address),
     }),
@@ -74,7 +77,7 @@ export function Editor({ session }: { readonly session: Session }) {
     () => (operations: readonly Operation[]) => tryOutTally(session, operations),
     [session],
   )
-  useEditorKeys(root, platform, palette.open, onCommand)
+  useEditorKeys(root, platform, palette.open || panel !== undefined, onCommand)
 
   // biome-ignore lint/correctness/useExhaustiveDependencies: a change of shape may take the sheet or the selected cell away
   useEffect(() => view.settle(session.workbook), [view, session, shape])
@@ -155,6 +158,15 @@ export function Editor({ session }: { readonly session: Session }) {
         tryOut={tryOut}
         {...(palette.command === undefined ? {} : { begin: { command: palette.command } })}
       />
+      {panel ? (
+        <Panels
+          panel={panel}
+          session={session}
+          onGo={(address) => select({ session, view }, { ...address, rowCount: 1, columnCount: 1 })}
+          onClose={() => setPanel(undefined)}
+          onClosed={() => view.focus?.grid()}
+        />
+      ) : null}
     </div>
   )
 }

@@ -6,12 +6,15 @@ import { pressOf } from '../_grid/cell-editor'
 import type { Editing } from '../_grid/editing'
 import { openingText } from '../_grid/entry'
 import { editAction } from '../_grid/keys'
+import { CellAbout } from './cell-about'
 import { cellWords } from './cell-words'
+import { entryPreview } from './entry-preview'
+import { lastChangeWords } from './last-change-words'
 import { NoteField } from './note-field'
 import { lockWords } from './permission-words'
 import { SaveWords } from './save-words'
 import type { WorkbookSession } from './session-contract'
-import { useShape, useView } from './use-session'
+import { useSession, useView } from './use-session'
 import type { EditorView } from './view-state'
 
 interface Props {
@@ -25,12 +28,16 @@ interface Props {
 
 /** The selected cell's input, what it is in words, its unit and source, and whether everything is saved. */
 export function EntryLine({ session, view, editing, note, onNoteDone }: Props) {
-  useShape(session)
+  useSession(session)
   useValuesOf(session, view)
   const { sheet: shown, selection, edit } = useView(view)
   const { row, column } = selection.active
   const sheet = sheetById(session.workbook, shown)
-  const words = cellWords(session, { sheet: shown, row, column })
+  const address = { sheet: shown, row, column }
+  const typing = edit?.sheet === shown && edit.row === row && edit.column === column ? edit.text : undefined
+  const words = cellWords(session, address, typing)
+  const preview = typing === undefined ? undefined : entryPreview(session, editing, address, typing)
+  const changed = lastChangeWords(session, session.lastChange(address), new Date())
   const locked = sheet && lockWords(session, sheet)
   const id = useId()
   const input = useRef<HTMLInputElement>(null)
@@ -55,66 +62,62 @@ export function EntryLine({ session, view, editing, note, onNoteDone }: Props) {
     >
       <span className="figure w-14 font-semibold text-[0.875rem] text-clay max-sm:w-10">{words.address}</span>
       <div className="min-w-0">
-        <input
-          ref={input}
-          data-region-focus
-          aria-label={`Input of ${words.address}`}
-          aria-describedby={`${id}-about`}
-          aria-invalid={edit?.where === 'line' && edit.error ? true : undefined}
-          value={text}
-          readOnly={locked !== undefined}
-          spellCheck={false}
-          autoComplete="off"
-          placeholder={locked ? '' : 'empty'}
-          className="block w-full truncate rounded-[2px] bg-transparent text-[0.9375rem] leading-6 outline-none placeholder:text-quiet focus-visible:bg-paper focus-visible:shadow-[0_0_0_4px_var(--paper),0_2px_0_4px_var(--clay)]"
-          onFocus={() => {
-            if (locked === undefined && !edit) editing.begin('line')
-          }}
-          onChange={(event) => {
-            if (!edit && !editing.begin('line')) return
-            editing.retype(event.target.value)
-          }}
-          onBlur={() => {
-            const now = view.snapshot().edit
-            if (now?.where === 'line' && !now.error) editing.commit(now.text, 'none', 0, false)
-          }}
-          onKeyDown={onKeyDown}
-        />
+        <div className="flex items-baseline gap-4">
+          <input
+            ref={input}
+            data-region-focus
+            aria-label={`Input of ${words.address}`}
+            aria-describedby={`${id}-about`}
+            aria-invalid={edit?.where === 'line' && edit.error ? true : undefined}
+            value={text}
+            readOnly={locked !== undefined}
+            spellCheck={false}
+            autoComplete="off"
+            placeholder={locked ? '' : 'empty'}
+            className="block min-w-0 flex-1 truncate rounded-[2px] bg-transparent text-[0.9375rem] leading-6 outline-none placeholder:text-quiet focus-visible:bg-paper focus-visible:shadow-[0_0_0_4px_var(--paper),0_2px_0_4px_var(--clay)]"
+            onFocus={() => {
+              if (locked === undefined && !edit) editing.begin('line')
+            }}
+            onChange={(event) => {
+              if (!edit && !editing.begin('line')) return
+              editing.retype(event.target.value)
+            }}
+            onBlur={() => {
+              const now = view.snapshot().edit
+              if (now?.where === 'line' && !now.error) editing.commit(now.text, 'none', 0, false)
+            }}
+            onKeyDown={onKeyDown}
+          />
+          <output className="figure shrink-0 text-[0.875rem] text-quiet">
+            {preview ? `= ${preview}` : ''}
+          </output>
+        </div>
         {note && sheet && locked === undefined ? (
           <NoteField
             key={`${shown} ${row} ${column}`}
             session={session}
-            address={{ sheet: shown, row, column }}
+            address={address}
             onDone={() => {
               onNoteDone()
               view.focus?.grid()
             }}
           />
         ) : null}
-        <p
-          hidden={note}
-          id={`${id}-about`}
-          className="min-h-5 truncate text-[0.8125rem] text-quiet leading-5"
-        >
-          {problem ? (
-            <span className="text-ember">
-              <span aria-hidden="true">! </span>
-              {problem}
-            </span>
-          ) : (
-            <>
-              {words.about}
-              {words.note ? <span title={words.note}> · {words.note}</span> : null}
-              {locked ? <span> · {locked}</span> : null}
-            </>
-          )}
-        </p>
+        {note ? null : (
+          <CellAbout
+            key={`${shown} ${row} ${column}`}
+            id={`${id}-about`}
+            problem={problem}
+            parts={[words.about, words.formula, words.note, locked]}
+          />
+        )}
       </div>
       <div className="text-right text-[0.8125rem] text-quiet leading-5 max-sm:col-span-2 max-sm:flex max-sm:justify-between max-sm:text-left">
         <p className="max-w-[26rem] truncate" title={words.source || undefined}>
           {[words.unit, words.source].filter(Boolean).join(' · ')}
         </p>
         <p>
+          {changed ? <span className="max-lg:hidden">{changed} · </span> : null}
           <SaveWords session={session} />
         </p>
       </div>

@@ -32,7 +32,11 @@ export class LocalWorkbook {
   readonly done = new UndoStack()
   pending: PendingOperation[] = []
   /** Told what others did, as it reads on top of everything here, before it is applied. */
-  onForeign: (operations: readonly Operation[], sheets: readonly SheetGround[]) => void = () => undefined
+  onForeign: (
+    operations: readonly Operation[],
+    sheets: readonly SheetGround[],
+    logged: readonly LoggedOperation[],
+  ) => void = () => undefined
 
   constructor(
     readonly workbook: Workbook,
@@ -106,7 +110,8 @@ export class LocalWorkbook {
     const mine = new Set(this.pending.map((operation) => operation.id))
     // The log took one's own on the ground they were made on, so they stand before all that is foreign.
     const known = missing.filter((operation) => mine.has(operation.id))
-    const foreign = missing.filter((operation) => !mine.has(operation.id)).map(({ op }) => op)
+    const logged = missing.filter((operation) => !mine.has(operation.id))
+    const foreign = logged.map(({ op }) => op)
     if (foreign.length === 0) {
       this.acknowledge(seq, new Set(known.map((operation) => operation.id)))
       return []
@@ -119,7 +124,7 @@ export class LocalWorkbook {
     const rest = this.pending.filter((operation) => !knownIds.has(operation.id))
     const rebased = rebasePending(this.workbook.sheets, rest, foreign, this.newId)
     this.stepsFollow(sheets, rest, rebased.over)
-    this.onForeign(rebased.over, sheets)
+    this.onForeign(rebased.over, sheets, logged)
     for (const op of foreign) follow.must(op)
     this.pending = []
     const lost = [...rebased.lost]

@@ -8,6 +8,7 @@ import { sheetById } from '@/lib/workbook'
 import type { Editing } from '../_grid/editing'
 import { fromCommand } from '../_grid/selection'
 import { copySelection, pasteClipboard } from './clipboard-commands'
+import type { PanelShown } from './panels'
 import type { Session } from './session'
 import { type EditorView, extentOf } from './view-state'
 
@@ -17,6 +18,7 @@ export interface EffectReach {
   readonly view: EditorView
   readonly editing: Editing
   readonly openPalette: (command?: string) => void
+  readonly openPanel: (panel: PanelShown) => void
   readonly editNote: () => void
   readonly goTo: (address: string) => void
 }
@@ -63,6 +65,9 @@ function changeView(reach: EffectReach, change: ViewChange): void {
       return
     case 'export-xlsx':
       void exportXlsx(session)
+      return
+    case 'list-checks':
+      reach.openPanel({ kind: 'look-at' })
       return
     case 'open-palette':
       reach.openPalette(change.command)

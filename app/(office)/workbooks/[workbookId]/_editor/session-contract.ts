@@ -1,5 +1,6 @@
 import type { Result } from '@/lib/failures'
 import type { CellAddress, CellValue, Operation, Workbook } from '@/lib/workbook'
+import type { LastChange } from './last-changes'
 
 /** What the status words say: saved, saving, offline with n changes, cannot save (and why). */
 export type SaveStatus =
@@ -54,6 +55,8 @@ export interface WorkbookSession {
     operations: readonly Operation[],
     names: readonly string[],
   ): Promise<Readonly<Record<string, readonly CellValue[]>>>
+  /** Who changed the cell last, as far as this tab has seen it. */
+  lastChange(address: CellAddress): LastChange | undefined
   /** Called with the cells whose values changed, as they change. */
   onValues(listener: (changes: ValueChanges) => void): () => void
   close(): void

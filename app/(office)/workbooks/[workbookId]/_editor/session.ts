@@ -14,6 +14,7 @@ import {
 } from '@/lib/workbook'
 import { adoptClosedTabs } from './adopt'
 import { EngineLink } from './engine-link'
+import { type LastChange, LastChanges } from './last-changes'
 import { type Followed, LocalWorkbook, type PendingOperation } from './local-workbook'
 import { serverOf } from './post-operations'
 import { type OperationQueue, openQueue, type QueuedOperation } from './queue'
@@ -46,6 +47,9 @@ export class Session implements WorkbookSession {
   private readonly newsListeners = new Set<(news: SessionNews) => void>()
   private sync: Sync | undefined
   private queue: OperationQueue | undefined
+  private readonly lastChanges = new LastChanges()
+  /** How the next operations are remembered: as made here, as already remembered, or as only moving cells. */
+  private remember: 'own' | 'done' | 'moves' = 'moves'
   private shape = 0
   private current: SessionSnapshot
   private closed = false
@@ -65,7 +69,9 @@ export class Session implements WorkbookSession {
       stopped: (text) => this.announce({ kind: 'refused', text }),
     })
     this.local = new LocalWorkbook(workbook, opened.snapshot.seq, () => crypto.randomUUID(), this.follow)
-    this.local.onForeign = (operations, sheets) => {
+    this.local.onForeign = (operations, sheets, logged) => {
+      this.lastChanges.followLogged(operations, logged)
+      this.remember = 'done'
       for (const listener of this.foreignListeners) listener(operations, sheets)
     }
     this.current = this.read(0)
@@ -144,18 +150,24 @@ export class Session implements WorkbookSession {
       const refused = refusal(this.workbook, operation, role)
       if (refused) return { ok: false, failure: refused }
     }
-    const made = this.local.dispatch(label, operations, place ?? placeOf(operations))
+    const made = this.asOwn(() => this.local.dispatch(label, operations, place ?? placeOf(operations)))
     if (!made.ok) return made
     this.send(made.value)
     return succeed(undefined)
   }
 
   undo(): Result<string> {
-    return this.took(this.local.undo(), 'Undid')
+    return this.took(
+      this.asOwn(() => this.local.undo()),
+      'Undid',
+    )
   }
 
   redo(): Result<string> {
-    return this.took(this.local.redo(), 'Did again')
+    return this.took(
+      this.asOwn(() => this.local.redo()),
+      'Did again',
+    )
   }
 
   private took(step: ReturnType<LocalWorkbook['undo']>, verb: string): Result<string> {
@@ -168,6 +180,19 @@ export class Session implements WorkbookSession {
     const text = `${verb}: ${label}`
     this.announce({ kind: 'moved', text, place })
     return succeed(text)
+  }
+
+  lastChange(address: CellAddress): LastChange | undefined {
+    return this.lastChanges.of(address)
+  }
+
+  private asOwn<T>(act: () => T): T {
+    this.remember = 'own'
+    try {
+      return act()
+    } finally {
+      this.remember = 'moves'
+    }
   }
 
   tryOut(operations: readonly Operation[], names: readonly string[]) {
@@ -202,10 +227,19 @@ export class Session implements WorkbookSession {
   private readonly follow = ({ operations, touched }: Followed): void => {
     if (operations.length === 0) return
     if (operations.some((operation) => operation.kind !== 'set-cells')) this.shape += 1
+    this.followChanges(operations)
     const changes = this.values.follow(operations, touched)
     this.engine.apply(operations)
     this.tell(changes)
     this.changed()
+  }
+
+  private followChanges(operations: readonly Operation[]): void {
+    if (this.remember !== 'done') {
+      const own = { author: this.actor.id, at: new Date().toISOString() }
+      this.lastChanges.follow(operations, this.remember === 'own' ? own : undefined)
+    }
+    this.remember = 'moves'
   }
 
   private tell(changes: ValueChanges): void {
