@@ -79,8 +79,9 @@ export function downsize(instance: Instance, bars: Bars, left: readonly number[]
   })
 }
 
+/** Rounded to twelve digits: a sum of prices keeps no noise of binary fractions. */
 export function costOf(instance: Instance, bars: Bars): number {
-  return bars.reduce((sum, bar) => sum + (instance.stock[bar.stock]?.price ?? 0), 0)
+  return Number(bars.reduce((sum, bar) => sum + (instance.stock[bar.stock]?.price ?? 0), 0).toPrecision(12))
 }
 
 /** The cheapest of best-fit decreasing over every opening stock, and over reproducible shuffles of the order. */

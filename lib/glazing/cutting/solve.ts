@@ -116,7 +116,7 @@ export function stepUp(instance: Instance, bound: number): number {
   const cents = instance.stock.map((option) => Math.round(option.price * 1e4))
   if (instance.stock.some((option, s) => Math.abs(option.price * 1e4 - (cents[s] ?? 0)) > 1e-6)) return bound
   const step = cents.reduce(greatestCommonDivisor, 0) / 1e4
-  return step > 0 ? Math.ceil(bound / step - 1e-6) * step : bound
+  return step > 0 ? Number((Math.ceil(bound / step - 1e-6) * step).toPrecision(12)) : bound
 }
 
 function greatestCommonDivisor(a: number, b: number): number {
