@@ -25,6 +25,8 @@ const json = {
       cells: [
         [1, 1, { input: 10 }],
         [3, 1, { input: '=B2*2' }],
+        [4, 1, { input: 100, format: { quantity: 'length' } }],
+        [5, 1, { input: '=B5*B2', format: { quantity: 'length' } }],
       ],
     },
   ],
@@ -113,6 +115,22 @@ describe('values on the screen', () => {
     expect([at(1), at(2), at(3), at(4)]).toEqual([15, null, null, 30])
     while (engine.next());
     expect([at(1), at(2), at(3), at(4)]).toEqual([15, null, null, 30])
+    link.close()
+  })
+
+  it('results stand in the other units as soon as they are converted, also those that were on their way', () => {
+    const { link, engine, act, at } = opened()
+    link.start()
+    engine.next()
+    expect(at(5)).toBe(1000)
+    act(set(1, 20))
+    act({ kind: 'convert-units', system: 'si' })
+    expect(at(4)).toBeCloseTo(30.48, 12)
+    expect(at(5)).toBeCloseTo(304.8, 9)
+    engine.next()
+    expect([at(3), at(5)]).toEqual([40, expect.closeTo(609.6, 9)])
+    while (engine.next());
+    expect([at(3), at(5)]).toEqual([40, expect.closeTo(609.6, 9)])
     link.close()
   })
 

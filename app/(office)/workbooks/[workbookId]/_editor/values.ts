@@ -1,3 +1,4 @@
+import { convert, type UnitSystem } from '@/lib/units'
 import {
   type CellAddress,
   type CellInput,
@@ -6,7 +7,9 @@ import {
   isFormula,
   type Operation,
   type PackedChanges,
+  quantityOf,
   type StoredValues,
+  sheetById,
   ValueCache,
   type Workbook,
 } from '@/lib/workbook'
@@ -20,11 +23,14 @@ export class SessionValues {
   private readonly cache: ValueCache
   /** Until the engine has given every value, an input that was not stored stands for itself. */
   private complete = false
+  /** The system that the values are in. */
+  private system: UnitSystem
 
   constructor(
     private readonly workbook: Workbook,
     stored: StoredValues | undefined,
   ) {
+    this.system = workbook.system
     this.cache = stored ? ValueCache.fromStored(stored) : new ValueCache()
   }
 
@@ -61,9 +67,12 @@ export class SessionValues {
     computed.applyPacked(packed)
     for (const operation of ahead) computed.follow(operation)
     const changed: CellAddress[] = []
+    // Computed before the units were converted: the number is in the units from before.
+    const conversion = ahead.find((operation) => operation.kind === 'convert-units')
+    const from = conversion && (conversion.system === 'us' ? 'si' : 'us')
     computed.each((address, value) => {
       if (this.isTypedIn(ahead, address)) return
-      this.cache.set(address, value)
+      this.cache.set(address, from ? this.converted(address, value, from) : value)
       changed.push(address)
     })
     return touchedChanges(changed)
@@ -82,11 +91,41 @@ export class SessionValues {
   /** What was done to the workbook here, before the engine has followed. */
   follow(operations: readonly Operation[], touched: readonly CellAddress[]): ValueChanges {
     for (const operation of operations) this.cache.follow(operation)
+    const converted = this.convertComputed()
     for (const address of touched) {
       const input = cellAt(this.workbook, address)?.input
       if (!isFormula(input)) this.cache.set(address, literal(input))
     }
-    return touchedChanges(touched)
+    return touchedChanges(converted.length > 0 ? [...touched, ...converted] : touched)
+  }
+
+  /** When the workbook has come into the other system, results stand in its units before the engine has answered. */
+  private convertComputed(): CellAddress[] {
+    const { workbook, system: before } = this
+    if (workbook.system === before) return []
+    this.system = workbook.system
+    const converted: CellAddress[] = []
+    for (const sheet of workbook.sheets) {
+      sheet.rows.forEach((cells, row) => {
+        cells?.forEach((cell, column) => {
+          if (!isFormula(cell?.input)) return
+          const at = { sheet: sheet.id, row, column }
+          const value = this.cache.get(at)
+          const now = this.converted(at, value, before)
+          if (now === value) return
+          this.cache.set(at, now)
+          converted.push(at)
+        })
+      })
+    }
+    return converted
+  }
+
+  private converted(address: CellAddress, value: CellValue, from: UnitSystem): CellValue {
+    const sheet = sheetById(this.workbook, address.sheet)
+    if (typeof value !== 'number' || !sheet) return value
+    const quantity = quantityOf(sheet.rows[address.row]?.[address.column], sheet, address.column)
+    return quantity === undefined ? value : convert(value, quantity, from, this.workbook.system)
   }
 }
 
