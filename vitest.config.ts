@@ -37,7 +37,7 @@ export default defineConfig({
         test: {
           name: 'sheet',
           include: ['tests/**/*.sheet.test.ts'],
-          testTimeout: 120_000,
+          testTimeout: 300_000,
           maxWorkers: 2,
           sequence: { groupOrder: 2 },
         },
