@@ -1,9 +1,10 @@
-import type { Page } from 'playwright-core'
+import type { Browser, Page } from 'playwright-core'
 import { engineConfig } from '@/lib/workbook/engine/config'
 import type { Bench, Uploaded } from './browser'
 import { editRawPage, openRawPage, type RawEdit } from './chromium'
 import { backToCell, goToCell, openEditor, typeNumber } from './editor-page'
-import { type Gaps, painted, stopGaps, watchGaps } from './page-probe'
+import { type LongestTask, longestTaskDuring } from './main-thread'
+import { painted } from './page-probe'
 import { type RawSource, rawSource } from './raw-engine'
 import type { Line } from './report'
 import { maximum, median } from './statistics'
@@ -17,6 +18,12 @@ interface Timed {
   readonly raw: RawEdit
   /** Milliseconds from Enter until the result was painted. */
   readonly paint: number
+}
+
+/** The longest task of one edit here, and of the same edit with the engine on the main thread. */
+interface Tasks {
+  readonly here: LongestTask
+  readonly there: LongestTask
 }
 
 /**
@@ -33,15 +40,14 @@ export async function measureEdits(bench: Bench, { id, title, subject }: Uploade
 
   await goToCell(page, subject.workbook, fan.place)
   const fans = (await both.times(fan, warmUp + edits)).slice(warmUp)
-  const tasks = whole ? await both.gaps(fan, watched) : undefined
-  const idle = whole ? await idleGap(page) : 0
+  const tasks = whole ? await both.tasks(bench.browser, fan, watched) : undefined
   await goToCell(page, subject.workbook, local.place)
   const locals = (await both.times(local, warmUp + edits)).slice(warmUp)
   await page.close()
   await rawPage.close()
 
   const lines = [fanLine(title, fans), localLine(title, locals)]
-  return tasks ? [...lines, ...taskLines(title, tasks, idle)] : lines
+  return tasks ? [...lines, ...taskLines(title, tasks)] : lines
 }
 
 class BothPages {
@@ -68,21 +74,25 @@ class BothPages {
     return times
   }
 
-  async gaps(edit: Edit, count: number): Promise<(Gaps & { readonly raw: RawEdit })[]> {
-    const gaps: (Gaps & { readonly raw: RawEdit })[] = []
+  async tasks(browser: Browser, edit: Edit, count: number): Promise<Tasks[]> {
+    const tasks: Tasks[] = []
     for (let i = 0; i < count; i++) {
       const number = this.next(edit)
-      const raw = await this.editRaw(edit, number)
+      let expected = Number.NaN
+      const there = await longestTaskDuring(browser, async () => {
+        expected = (await this.editRaw(edit, number)).result
+      })
       await typeNumber(this.page, number)
-      const shown = painted(this.page, raw.result, 0.0051)
-      await watchGaps(this.page)
-      await this.page.keyboard.press('Enter')
-      await shown
-      await this.page.waitForTimeout(200)
-      gaps.push({ ...(await stopGaps(this.page)), raw })
+      const here = await longestTaskDuring(browser, async () => {
+        const shown = painted(this.page, expected, 0.0051)
+        await this.page.keyboard.press('Enter')
+        await shown
+        await this.page.waitForTimeout(300)
+      })
+      tasks.push({ here, there })
       await backToCell(this.page)
     }
-    return gaps
+    return tasks
   }
 
   /** Numbers of few digits, each another. */
@@ -98,13 +108,6 @@ class BothPages {
     }
     return editRawPage(this.rawPage, at(edit.place), number, at(edit.result))
   }
-}
-
-/** The same watch while nobody does anything: what the machine itself takes. */
-async function idleGap(page: Page): Promise<number> {
-  await watchGaps(page)
-  await page.waitForTimeout(500)
-  return (await stopGaps(page)).gap
 }
 
 const engineOf = (times: readonly Timed[]) => median(times.map(({ raw }) => raw.engine))
@@ -134,35 +137,28 @@ function localLine(title: string, times: readonly Timed[]): Line {
   }
 }
 
-function taskLines(title: string, gaps: readonly (Gaps & { raw: RawEdit })[], idle: number): Line[] {
-  const ours = gaps.map(({ gap }) => gap)
-  const theirs = gaps.map(({ raw }) => raw.gap)
+function taskLines(title: string, tasks: readonly Tasks[]): Line[] {
+  const here = tasks.map((one) => one.here.processor)
+  const there = tasks.map((one) => one.there.processor)
   const list = (times: readonly number[]) => times.map((time) => time.toFixed(1)).join(', ')
-  const section = 'browser'
+  const line = (what: string, value: number, unit: Line['unit'], most: number, raw: string): Line => ({
+    section: 'browser',
+    what: `${title}: longest main-thread task of a fan edit, ${what}`,
+    value,
+    unit,
+    goal: { most },
+    raw,
+  })
+  const clock = `by the clock ${list(tasks.map((one) => one.here.clock))} ms`
   return [
-    {
-      section,
-      what: `${title}: longest main-thread task of a fan edit, median`,
-      value: median(ours),
-      unit: 'ms',
-      goal: { most: 16 },
-      raw: `${list(ours)} ms; idle ${idle.toFixed(1)} ms`,
-    },
-    {
-      section,
-      what: `${title}: longest main-thread task of a fan edit, worst`,
-      value: Math.max(maximum(ours), ...gaps.map(({ task }) => task)),
-      unit: 'ms',
-      goal: { most: 50 },
-      raw: `${gaps.filter(({ task }) => task > 0).length} of ${gaps.length} had a task above 50 ms`,
-    },
-    {
-      section,
-      what: `${title}: longest main-thread task, to the engine on the main thread`,
-      value: median(ours) / median(theirs),
-      unit: 'ratio',
-      goal: { most: 0.06 },
-      raw: `there ${list(theirs)} ms`,
-    },
+    line('median', median(here), 'ms', 16, `processor time ${list(here)} ms; ${clock}`),
+    line('worst', maximum(here), 'ms', 50, clock),
+    line(
+      'to the engine on the main thread',
+      median(here) / median(there),
+      'ratio',
+      0.06,
+      `there ${list(there)} ms`,
+    ),
   ]
 }

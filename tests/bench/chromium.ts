@@ -47,8 +47,6 @@ export async function openRawPage(page: Page, source: RawSource): Promise<number
 /** Milliseconds of one edit in the raw page, and the number that came out. */
 export interface RawEdit {
   readonly engine: number
-  /** The longest that the page gave nobody a turn, from the edit until its result was painted. */
-  readonly gap: number
   readonly result: number
 }
 
@@ -57,26 +55,14 @@ export function editRawPage(page: Page, address: Address, value: number, shown: 
   return page.evaluate(
     async ({ address, value, shown }) => {
       const { raw } = globalThis as never as RawWindow
-      let gap = 0
-      let last = performance.now()
-      let going = true
-      const channel = new MessageChannel()
-      channel.port1.onmessage = () => {
-        const now = performance.now()
-        gap = Math.max(gap, now - last)
-        last = now
-        if (going) channel.port2.postMessage(0)
-      }
       const started = performance.now()
       raw.setCellContents(address, value)
       const engine = performance.now() - started
-      channel.port2.postMessage(0)
       const result = Number(raw.getCellValue(shown))
       const text = document.getElementById('total')
       if (text) text.textContent = String(result)
       await new Promise((resolve) => requestAnimationFrame(() => setTimeout(resolve)))
-      going = false
-      return { engine, gap, result }
+      return { engine, result }
     },
     { address, value, shown },
   )

@@ -5,14 +5,13 @@ import type { Page, Response } from 'playwright-core'
 export interface Scripts {
   /** Named in the page's own HTML: what a first load waits for. */
   readonly first: number
-  /** Of those that the window fetched later, the ones that hold the grid. */
-  readonly grid: number
+  /** Those that the window fetched later, the grid among them, largest first. */
+  readonly later: readonly number[]
   /** Of all that the window fetched, the ones that hold HyperFormula; and the same of its workers. */
   readonly engineOnWindow: number
   readonly engineInWorker: number
 }
 
-const gridMark = '--gdg-'
 const engineMark = 'buildFromSheets'
 
 /** Opens an address and weighs the scripts that come; `settled` says when the last of them has been asked for. */
@@ -46,7 +45,10 @@ export async function weighScripts(
     scripts.filter(test).reduce((total, { size }) => total + size, 0)
   return {
     first: sum(({ url }) => first.has(url)),
-    grid: sum(({ url, text }) => !first.has(url) && onWindow.has(url) && text.includes(gridMark)),
+    later: scripts
+      .filter(({ url }) => !first.has(url) && onWindow.has(url))
+      .map(({ size }) => size)
+      .sort((a, b) => b - a),
     engineOnWindow: sum(
       ({ url, text }) => (onWindow.has(url) || first.has(url)) && text.includes(engineMark),
     ),

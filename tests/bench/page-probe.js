@@ -1,12 +1,9 @@
 // Runs in the page before any of its own scripts; the benchmark reads `window.probe` (see page-probe.ts for its shape).
-// It changes nothing that the page does: it notes when a text is drawn, when Enter is pressed, and how long tasks last.
+// It changes nothing that the page does: it notes when a text is drawn, when Enter is pressed, when a worker is made.
 ;(() => {
   /** @type {{ test: (text: string) => boolean, done: (at: number) => void } | undefined} */
   let wanted
   let enterAt = 0
-  let gapWatch = false
-  let longestGap = 0
-  let longestTask = 0
   let workerAt = 0
   /** When each text was first painted, of the first few thousand that are drawn. @type {Map<string, number>} */
   const firstPainted = new Map()
@@ -22,7 +19,6 @@
     return bare !== '' && Math.abs(Number(bare) - number) <= within
   }
 
-  const channel = new MessageChannel()
   const drawn = new MessageChannel()
   drawn.port1.onmessage = () => {
     const now = performance.now()
@@ -55,18 +51,6 @@
     { capture: true },
   )
 
-  new PerformanceObserver((list) => {
-    for (const entry of list.getEntries()) longestTask = Math.max(longestTask, entry.duration)
-  }).observe({ type: 'longtask' })
-
-  let lastTurn = 0
-  channel.port1.onmessage = () => {
-    const now = performance.now()
-    longestGap = Math.max(longestGap, now - lastTurn)
-    lastTurn = now
-    if (gapWatch) channel.port2.postMessage(0)
-  }
-
   const PlainWorker = globalThis.Worker
   globalThis.Worker = class extends PlainWorker {
     /** @param {ConstructorParameters<typeof Worker>} given */
@@ -89,17 +73,6 @@
     firstPainted: (/** @type {number} */ number, /** @type {number} */ within) => {
       for (const [text, at] of firstPainted) if (isNumber(text, number, within) && at > 0) return at
       return undefined
-    },
-    watchGaps: () => {
-      gapWatch = true
-      longestGap = 0
-      longestTask = 0
-      lastTurn = performance.now()
-      channel.port2.postMessage(0)
-    },
-    stopGaps: () => {
-      gapWatch = false
-      return { gap: longestGap, task: longestTask }
     },
     workerAt: () => workerAt,
     /** Milliseconds between animation frames, for so long. */

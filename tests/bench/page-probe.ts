@@ -6,8 +6,6 @@ import { projectRoot } from './empty-app'
 interface Probe {
   painted(number: number, within: number): Promise<Painted>
   firstPainted(number: number, within: number): number | undefined
-  watchGaps(): void
-  stopGaps(): Gaps
   workerAt(): number
   frames(milliseconds: number): Promise<number[]>
 }
@@ -16,12 +14,6 @@ interface Probe {
 export interface Painted {
   readonly at: number
   readonly sinceEnter: number
-}
-
-/** The longest that the main thread gave nobody a turn, and the longest of its tasks above 50 ms (else 0). */
-export interface Gaps {
-  readonly gap: number
-  readonly task: number
 }
 
 type Probed = { readonly probe: Probe }
@@ -51,14 +43,6 @@ export async function firstPainted(page: Page, number: number, within: number): 
     { timeout: 60_000, polling: 100 },
   )
   return (await handle.jsonValue()) as number
-}
-
-export function watchGaps(page: Page): Promise<void> {
-  return page.evaluate(() => (globalThis as never as Probed).probe.watchGaps())
-}
-
-export function stopGaps(page: Page): Promise<Gaps> {
-  return page.evaluate(() => (globalThis as never as Probed).probe.stopGaps())
 }
 
 /** When the page last made a worker, in its own milliseconds. */
