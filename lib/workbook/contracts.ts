@@ -41,5 +41,10 @@ export interface Engine {
   named(name: string): readonly CellValue[] | undefined
   /** What the named values would be if `operations` were applied; nothing stays changed. */
   tryOut(operations: readonly Operation[], names: readonly string[]): Record<string, readonly CellValue[]>
+  /**
+   * The same for the next of many: the last one tried is taken back in the same calculation, and this one stays in until the
+   * next call of any kind, so that trying many computes once for each.
+   */
+  tryNext(operations: readonly Operation[], names: readonly string[]): Record<string, readonly CellValue[]>
   destroy(): void
 }

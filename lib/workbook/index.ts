@@ -9,6 +9,7 @@ export {
   type EngineClient,
   type EngineClientOptions,
   type EngineClientStatus,
+  type ManyTried,
 } from './engine/client'
 export type { ClientPort, EngineReply, EngineRequest, ServerPort, TriedValues } from './engine/protocol'
 export * from './entry'
@@ -23,6 +24,7 @@ export * from './permission'
 export type { SheetGround } from './rebase/ground'
 export { type Rebased, rebase, squash } from './rebase/rebase'
 export * from './serial'
+export { type Evaluate, type Solved, type SolveRequest, solveFor } from './solve/solve-for'
 export * from './tsv'
 export { ValueCache } from './values/cache'
 export { packedValue, transferOf, unpack } from './values/packed'

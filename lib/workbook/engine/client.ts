@@ -33,7 +33,22 @@ export interface EngineClient {
   /** Operations that the workbook got. Never waits. */
   apply(operations: readonly Operation[]): void
   tryOut(operations: readonly Operation[], names: readonly string[]): Promise<TriedValues>
+  /**
+   * Tries out many lists, one after another, each on the workbook as it is; a name that a list cannot be tried for is absent.
+   * Edits go between them as ever, and end it, since what follows would be of another workbook.
+   */
+  tryMany(
+    lists: readonly (readonly Operation[])[],
+    names: readonly string[],
+    onTried?: (index: number, values: TriedValues) => void,
+  ): ManyTried
   close(): void
+}
+
+export interface ManyTried {
+  /** The values of every list; rejected with words when it was cancelled, the workbook changed, or a calculation was stopped. */
+  readonly result: Promise<readonly TriedValues[]>
+  cancel(): void
 }
 
 const usualPatience = { open: 60_000, answer: 8_000 }
@@ -57,6 +72,8 @@ class WatchedEngine implements EngineClient {
   private cancelTimer: () => void = () => {}
   private seq = 0
   private closed = false
+  /** How often the workbook changed. */
+  private changes = 0
   private readonly stopped = new Set<string>()
 
   constructor(private readonly options: EngineClientOptions) {}
@@ -73,7 +90,7 @@ class WatchedEngine implements EngineClient {
       if (port === this.port) this.broke(message)
     })
     // What waits to be applied is part of the workbook that is opened.
-    this.waiting = this.waiting.filter((task) => task.kind === 'try-out')
+    this.waiting = this.waiting.filter((task) => task.kind !== 'apply')
     this.setStatus({ kind: 'starting' })
     const workbook = this.options.workbook()
     this.ask('open', { kind: 'open', seq: this.nextSeq(), workbook, stopped: [...this.stopped] })
@@ -81,6 +98,7 @@ class WatchedEngine implements EngineClient {
 
   apply(operations: readonly Operation[]): void {
     if (this.closed || operations.length === 0) return
+    this.changes += 1
     if (this.status.kind === 'stopped') {
       if (operations.some(changesContent)) this.start()
       return
@@ -89,11 +107,45 @@ class WatchedEngine implements EngineClient {
   }
 
   tryOut(operations: readonly Operation[], names: readonly string[]): Promise<TriedValues> {
+    return this.try('try-out', operations, names)
+  }
+
+  tryMany(
+    lists: readonly (readonly Operation[])[],
+    names: readonly string[],
+    onTried?: (index: number, values: TriedValues) => void,
+  ): ManyTried {
+    const changes = this.changes
+    let cancelled = false
+    const run = async (): Promise<readonly TriedValues[]> => {
+      const all: TriedValues[] = []
+      for (const [index, operations] of lists.entries()) {
+        const values = await this.try('try-next', operations, names)
+        if (cancelled) throw new Error('It was stopped.')
+        if (changes !== this.changes) throw new Error('The workbook changed while this was tried out.')
+        all.push(values)
+        onTried?.(index, values)
+      }
+      return all
+    }
+    return {
+      result: run(),
+      cancel: () => {
+        cancelled = true
+      },
+    }
+  }
+
+  private try(
+    kind: 'try-out' | 'try-next',
+    operations: readonly Operation[],
+    names: readonly string[],
+  ): Promise<TriedValues> {
     if (this.closed || !this.port || this.status.kind === 'starting' || this.status.kind === 'stopped') {
       return Promise.reject(new Error('The calculation is not ready yet.'))
     }
     return new Promise((resolve, reject) => {
-      this.add({ kind: 'try-out', operations, names, resolve, reject })
+      this.add({ kind, operations, names, resolve, reject })
     })
   }
 
@@ -123,7 +175,7 @@ class WatchedEngine implements EngineClient {
       task,
       task.kind === 'apply'
         ? { kind: 'apply', seq, operations }
-        : { kind: 'try-out', seq, operations, names: task.names },
+        : { kind: task.kind, seq, operations, names: task.names },
     )
   }
 
@@ -145,7 +197,7 @@ class WatchedEngine implements EngineClient {
     this.cancelTimer()
     this.asked = undefined
     if (reply.kind === 'tried') {
-      if (asked.task !== 'open' && asked.task.kind === 'try-out') asked.task.resolve(reply.values)
+      if (asked.task !== 'open' && asked.task.kind !== 'apply') asked.task.resolve(reply.values)
     } else {
       this.options.onValues(reply.kind === 'opened' ? reply.values : reply.changes, reply.kind === 'opened')
     }
@@ -174,7 +226,7 @@ class WatchedEngine implements EngineClient {
       })
       return
     }
-    if (task.kind === 'try-out') task.reject(new Error(text))
+    if (task.kind !== 'apply') task.reject(new Error(text))
     else for (const formula of formulasOf(operations)) this.stopped.add(formula)
     this.rejectTryOuts(text)
     this.options.onStopped?.(text)
@@ -182,11 +234,11 @@ class WatchedEngine implements EngineClient {
   }
 
   private rejectTryOuts(text: string): void {
-    for (const task of this.waiting) if (task.kind === 'try-out') task.reject(new Error(text))
-    if (this.asked && this.asked.task !== 'open' && this.asked.task.kind === 'try-out') {
+    for (const task of this.waiting) if (task.kind !== 'apply') task.reject(new Error(text))
+    if (this.asked && this.asked.task !== 'open' && this.asked.task.kind !== 'apply') {
       this.asked.task.reject(new Error(text))
     }
-    this.waiting = this.waiting.filter((task) => task.kind !== 'try-out')
+    this.waiting = this.waiting.filter((task) => task.kind === 'apply')
   }
 
   private end(): void {

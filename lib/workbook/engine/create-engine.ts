@@ -3,14 +3,7 @@ import { applyOperation } from '../apply/apply-operation'
 import type { CellAddress, Engine, PackedChanges } from '../contracts'
 import { limits } from '../limits'
 import { cellAt } from '../lookup'
-import {
-  type CellError,
-  type CellInput,
-  type CellValue,
-  isFormula,
-  type NamedValue,
-  type Workbook,
-} from '../model'
+import { type CellError, type CellValue, isFormula, type NamedValue, type Workbook } from '../model'
 import type { Operation } from '../operations'
 import { fromJson, toJson, type WorkbookJson } from '../serial'
 import { ValueCache } from '../values/cache'
@@ -18,7 +11,8 @@ import { ChangePacker } from '../values/packed'
 import { cyclePath, pathText } from './cycle'
 import { followOperation } from './follow'
 import { buildGrid, engineAddress, type Grid } from './grid'
-import { describeError, stoppedError } from './sentences'
+import { describeError } from './sentences'
+import { withoutEngine } from './without-engine'
 
 export interface EngineOptions {
   /** Formula texts that are not computed because they were stopped before. */
@@ -50,6 +44,8 @@ class WorkbookEngine implements Engine {
   private grid: Grid | undefined
   private destroyed = false
   private circlesLeft = 0
+  /** What was tried out last and is still in: the operations that take it back, and the formulas that were stopped before. */
+  private trial: { readonly back: readonly Operation[]; readonly stopped: readonly string[] } | undefined
 
   constructor(
     source: Workbook | WorkbookJson,
@@ -61,6 +57,7 @@ class WorkbookEngine implements Engine {
   }
 
   apply(operations: readonly Operation[]): PackedChanges {
+    this.settle()
     const packer = new ChangePacker()
     this.circlesLeft = mostCircles
     if (operations.every(({ kind }) => kind === 'set-cells') || operations.length === 1) {
@@ -88,6 +85,7 @@ class WorkbookEngine implements Engine {
   }
 
   all(): PackedChanges {
+    this.settle()
     const packer = new ChangePacker()
     this.circlesLeft = mostCircles
     this.eachValue((address, value) => {
@@ -97,41 +95,66 @@ class WorkbookEngine implements Engine {
   }
 
   value(address: CellAddress): CellValue {
+    this.settle()
+    return this.valueOf(address)
+  }
+
+  private valueOf(address: CellAddress): CellValue {
     this.circlesLeft = 1
     return this.worded(address, this.raw(address))
   }
 
   named(name: string): readonly CellValue[] | undefined {
+    this.settle()
+    return this.read(name)
+  }
+
+  private read(name: string): readonly CellValue[] | undefined {
     const named = this.workbook.names.get(name)
     if (!named) return undefined
     const { area } = named
     const values: CellValue[] = []
     for (let row = area.row; row < area.row + area.rowCount; row += 1) {
       for (let column = area.column; column < area.column + area.columnCount; column += 1) {
-        values.push(this.value({ sheet: area.sheet, row, column }))
+        values.push(this.valueOf({ sheet: area.sheet, row, column }))
       }
     }
     return values
   }
 
   tryOut(operations: readonly Operation[], names: readonly string[]): Record<string, readonly CellValue[]> {
-    const values: Record<string, readonly CellValue[]> = {}
-    const stoppedBefore = [...this.stopped]
-    const inverses: (readonly Operation[])[] = []
-    let refused = false
-    for (const operation of operations) {
-      const inverse = this.step([operation], ignore)
-      refused ||= inverse === undefined
-      inverses.push(inverse ?? [])
+    const values = this.tryNext(operations, names)
+    this.settle()
+    return values
+  }
+
+  tryNext(operations: readonly Operation[], names: readonly string[]): Record<string, readonly CellValue[]> {
+    const back = this.trial?.back ?? []
+    const stopped = this.trial?.stopped ?? [...this.stopped]
+    let inverses: readonly (readonly Operation[] | undefined)[]
+    if (operations.length > 0 && [...back, ...operations].every(({ kind }) => kind === 'set-cells')) {
+      inverses = this.step([...back, ...operations], ignore).slice(back.length)
+    } else {
+      this.settle()
+      inverses = operations.flatMap((operation) => this.step([operation], ignore))
     }
-    for (const name of refused ? [] : names) {
-      const list = this.named(name)
+    this.trial = { back: inverses.toReversed().flatMap((inverse) => inverse ?? []), stopped }
+    const values: Record<string, readonly CellValue[]> = {}
+    for (const name of inverses.includes(undefined) ? [] : names) {
+      const list = this.read(name)
       if (list) values[name] = list
     }
-    for (const operation of inverses.reverse().flat()) this.step([operation], ignore)
-    this.stopped.clear()
-    for (const formula of stoppedBefore) this.stopped.add(formula)
     return values
+  }
+
+  /** Takes back what was tried out last. */
+  private settle(): void {
+    const { trial } = this
+    if (!trial) return
+    this.trial = undefined
+    for (const operation of trial.back) this.step([operation], ignore)
+    this.stopped.clear()
+    for (const formula of trial.stopped) this.stopped.add(formula)
   }
 
   destroy(): void {
@@ -142,27 +165,27 @@ class WorkbookEngine implements Engine {
 
   /**
    * Operations on model and grid: one, or several `set-cells` that are computed together. A refused one changes nothing, as it
-   * did where it was made. Returns what takes them back, undefined when one was refused.
+   * did where it was made. Returns what takes each back, undefined for one that was refused.
    */
   private step(
     operations: readonly Operation[],
     changes: Changes,
     applied: () => void = ignore,
-  ): readonly Operation[] | undefined {
+  ): readonly (readonly Operation[] | undefined)[] {
     if (this.destroyed) throw new Error('the engine was destroyed')
     const names = new Map(this.workbook.names)
-    const inverses: (readonly Operation[])[] = []
+    const inverses: (readonly Operation[] | undefined)[] = []
     const touched: CellAddress[] = []
     for (const operation of operations) {
       const result = applyOperation(this.workbook, operation)
+      inverses.push(result.ok ? result.value.inverse : undefined)
       if (!result.ok) continue
-      inverses.push(result.value.inverse)
       for (const cell of result.value.touched) touched.push(cell)
       applied()
     }
     const last = operations.at(-1)
-    if (last && inverses.length > 0) this.follow(last, touched, names, changes)
-    return inverses.length < operations.length ? undefined : inverses.reverse().flat()
+    if (last && inverses.some(Boolean)) this.follow(last, touched, names, changes)
+    return inverses
   }
 
   private follow(
@@ -269,12 +292,4 @@ function ignore(): void {}
 
 function isWorkbook(source: Workbook | WorkbookJson): source is Workbook {
   return source.names instanceof Map
-}
-
-/** Without a working engine, typed values still show and formulas say that they were stopped. */
-function withoutEngine(input: CellInput | undefined): Raw {
-  if (input === undefined) return null
-  if (typeof input !== 'string') return input
-  if (input.startsWith('=')) return stoppedError
-  return input.startsWith("'") ? input.slice(1) : input
 }

@@ -17,7 +17,8 @@ export type EngineRequest =
     }
   | { readonly kind: 'apply'; readonly seq: number; readonly operations: readonly Operation[] }
   | {
-      readonly kind: 'try-out'
+      /** `try-next` is one of many: what is tried stays in the engine until the next request takes it back. */
+      readonly kind: 'try-out' | 'try-next'
       readonly seq: number
       readonly operations: readonly Operation[]
       readonly names: readonly string[]

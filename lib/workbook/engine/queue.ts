@@ -3,7 +3,8 @@ import type { Operation } from '../operations'
 import type { TriedValues } from './protocol'
 
 export interface TryOutTask {
-  readonly kind: 'try-out'
+  /** A try-out gives way to a newer one that waits; one of many (`try-next`) does not. */
+  readonly kind: 'try-out' | 'try-next'
   readonly operations: readonly Operation[]
   readonly names: readonly string[]
   readonly resolve: (values: TriedValues) => void
@@ -27,6 +28,7 @@ export function enqueue(waiting: readonly Task[], task: Task): Task[] {
     })
     return [...kept, task]
   }
+  if (task.kind === 'try-next') return [...waiting, task]
   const last = waiting.at(-1)
   if (last?.kind === 'apply' && last.operations.length + task.operations.length <= mostTogether) {
     return [...waiting.slice(0, -1), { kind: 'apply', operations: [...last.operations, ...task.operations] }]

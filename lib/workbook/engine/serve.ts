@@ -29,7 +29,9 @@ export function serveEngine(port: ServerPort): void {
       const changes = engine.apply(request.operations)
       return { reply: { kind: 'applied', seq, changes }, transfer: transferOf(changes) }
     }
-    const values = engine.tryOut(request.operations, request.names)
+    const { operations, names } = request
+    const values =
+      request.kind === 'try-next' ? engine.tryNext(operations, names) : engine.tryOut(operations, names)
     return { reply: { kind: 'tried', seq, values }, transfer: [] }
   }
 }

@@ -210,6 +210,60 @@ describe('the client of the engine', () => {
     expect(await client.tryOut([set(0, 0, 9)], ['area'])).toEqual({ area: [90] })
   })
 
+  test('tries many, each on the workbook as it is, and tells of each; waiting try-outs do not push them out', async () => {
+    const { client, ports, shown, settle } = setUp()
+    client.start()
+    await settle()
+    const told: unknown[] = []
+    const many = client.tryMany(
+      [[set(0, 0, 3)], [set(1, 0, '=B1*2')], [], [set(0, 0, 5)]],
+      ['area'],
+      (index, values) => told.push([index, values.area?.[0]]),
+    )
+    const other = client.tryOut([set(0, 0, 9)], ['area'])
+    expect((await many.result).map(({ area }) => area?.[0])).toEqual([30, 20, 20, 50])
+    expect(told).toEqual([
+      [0, 30],
+      [1, 20],
+      [2, 20],
+      [3, 50],
+    ])
+    expect(await other).toEqual({ area: [90] })
+    expect(ports[0]?.requests.filter(({ kind }) => kind === 'try-next')).toHaveLength(4)
+    expect(shown.get('frame 0 1')).toBe(20)
+  })
+
+  test('many end when they are cancelled, and when the workbook changes', async () => {
+    const { client, ports, shown, edit, settle } = setUp()
+    client.start()
+    await settle()
+    const lists = [1, 2, 3, 4].map((value) => [set(0, 0, value)])
+    const cancelled = client.tryMany(lists, ['area'], (index) => index === 1 && cancelled.cancel())
+    await expect(cancelled.result).rejects.toThrow('stopped')
+    expect(ports[0]?.requests.filter(({ kind }) => kind === 'try-next').length).toBeLessThan(4)
+    const changed = client.tryMany(lists, ['area'], (index) => index === 1 && edit(set(0, 0, 7)))
+    await expect(changed.result).rejects.toThrow('workbook changed')
+    await settle()
+    expect(shown.get('frame 0 1')).toBe(70)
+    expect(client.status).toEqual({ kind: 'ready' })
+  })
+
+  test('[E12] one of many that never ends is refused, and the engine starts again', async () => {
+    const { client, ports, shown, runOut, settle } = setUp(
+      (request, port) => request.kind === 'try-next' && port === 0,
+    )
+    client.start()
+    await settle()
+    const many = client.tryMany([[set(0, 0, 9)]], ['area'])
+    const refused = expect(many.result).rejects.toThrow('took longer')
+    await settle()
+    runOut()
+    await refused
+    await settle()
+    expect(ports).toHaveLength(2)
+    expect(shown.get('frame 0 1')).toBe(20)
+  })
+
   test('closing ends the worker and refuses what waits', async () => {
     const { client, ports, settle, timers } = setUp((request) => request.kind === 'try-out')
     client.start()
