@@ -17,3 +17,8 @@ export function showsLoads(workbook: Workbook, sheet: Sheet): boolean {
     return typeof title === 'string' && titlesOfLoads.test(title)
   })
 }
+
+/** A sheet's sentence without the caution, where that stands beside it in full. */
+export function withoutCaution(about: string | undefined): string | undefined {
+  return about?.replace(/\s*A preliminary screen:[^.]*\./, '')
+}

@@ -68,7 +68,7 @@ function noteOf(
 ): string | undefined {
   if (cell?.note) return cell.note
   const ofRow = columnText(session, sheet, row, column, /^notes?$/i)
-  return ofRow === '' ? sheet.rows[0]?.[column]?.note : ofRow
+  return ofRow === '' ? sheet.rows[headerAbove(sheet, row)]?.[column]?.note : ofRow
 }
 
 const nothing: CellWords = {
@@ -103,18 +103,28 @@ function unitWords(session: WorkbookSession, sheet: Sheet, { row, column }: Cell
 
 /** "U of South roof": the column's title and the text that begins the row. */
 function labelAround(session: WorkbookSession, sheet: Sheet, { row, column }: CellAddress): string {
-  const title = textOf(session.value({ sheet: sheet.id, row: 0, column }))
+  const title = textOf(session.value({ sheet: sheet.id, row: headerAbove(sheet, row), column }))
   const begins = column === 0 ? '' : textOf(session.value({ sheet: sheet.id, row, column: 0 }))
   return [title, begins].filter(Boolean).join(', ')
 }
 
 /** What the column of that title says of the row; nothing of its own cells. */
 function columnText(session: WorkbookSession, sheet: Sheet, row: number, of: number, title: RegExp): string {
+  const header = headerAbove(sheet, row)
   for (let column = 0; column < sheet.columns.length; column += 1) {
-    if (column === of || !title.test(textOf(session.value({ sheet: sheet.id, row: 0, column })))) continue
-    return textOf(session.value({ sheet: sheet.id, row, column }))
+    const titled = title.test(textOf(session.value({ sheet: sheet.id, row: header, column })))
+    if (titled && column !== of) return textOf(session.value({ sheet: sheet.id, row, column }))
   }
   return ''
+}
+
+/** A sheet may hold several blocks of rows; each has its titles in a row of headings above it. */
+function headerAbove(sheet: Sheet, row: number): number {
+  for (let above = row - 1; above > 0; above -= 1) {
+    const headings = sheet.rows[above]?.filter((cell) => cell?.format?.style === 'heading').length ?? 0
+    if (headings > 1) return above
+  }
+  return 0
 }
 
 function textOf(value: CellValue): string {

@@ -3,6 +3,7 @@ import {
   createEngineClient,
   type EngineClient,
   type EngineReply,
+  type ManyTried,
   type Operation,
   type PackedChanges,
   type WorkbookJson,
@@ -76,6 +77,10 @@ export class EngineLink {
 
   tryOut(operations: readonly Operation[], names: readonly string[]) {
     return this.client.tryOut(operations, names)
+  }
+
+  tryMany(...asked: Parameters<EngineClient['tryMany']>): ManyTried {
+    return this.client.tryMany(...asked)
   }
 
   close(): void {

@@ -1,5 +1,5 @@
 import type { Result } from '@/lib/failures'
-import type { CellAddress, CellValue, Operation, Workbook } from '@/lib/workbook'
+import type { CellAddress, CellValue, ManyTried, Operation, TriedValues, Workbook } from '@/lib/workbook'
 import type { LastChange } from './last-changes'
 
 /** What the status words say: saved, saving, offline with n changes, cannot save (and why). */
@@ -55,6 +55,12 @@ export interface WorkbookSession {
     operations: readonly Operation[],
     names: readonly string[],
   ): Promise<Readonly<Record<string, readonly CellValue[]>>>
+  /** The same for many lists, one after another, each on the workbook as it is. */
+  tryMany(
+    lists: readonly (readonly Operation[])[],
+    names: readonly string[],
+    onTried: (index: number, values: TriedValues) => void,
+  ): ManyTried
   /** Who changed the cell last, as far as this tab has seen it. */
   lastChange(address: CellAddress): LastChange | undefined
   /** Called with the cells whose values changed, as they change. */

@@ -199,6 +199,8 @@ export class Session implements WorkbookSession {
     return this.engine.tryOut(operations, names)
   }
 
+  tryMany: WorkbookSession['tryMany'] = (...asked) => this.engine.tryMany(...asked)
+
   /** Waits until the server has everything; false when it cannot be had now. */
   async saved(): Promise<boolean> {
     return (await this.sync?.settle()) ?? this.local.pending.length === 0

@@ -1,6 +1,6 @@
 'use client'
 
-import { type KeyboardEvent, useEffect, useState } from 'react'
+import { type KeyboardEvent, useEffect, useRef, useState } from 'react'
 import { type CellAddress, cellName, sheetById } from '@/lib/workbook'
 import { bySeverity, type CheckBook, type Finding, findings, type Severity } from './checks'
 import { useKindFindings } from './kind-watch'
@@ -33,11 +33,16 @@ export function ThingsToLookAt({
 }) {
   const read = useFindings(session)
   const kinds = useKindFindings(session)
+  const list = useRef<HTMLUListElement>(null)
+  // The first is ready for Enter as soon as it is there.
+  useEffect(() => {
+    if (read) list.current?.querySelector<HTMLElement>('[data-finding]')?.focus()
+  }, [read])
   const found = read && bySeverity([...read, ...kinds])
   return (
     <Panel title="Things to look at" about={aboutWords(found)} onClose={onClose} onClosed={onClosed}>
       {found && found.length > 0 ? (
-        <ul className="m-0 min-h-0 list-none overflow-y-auto p-0 py-1.5" onKeyDown={moveFocus}>
+        <ul ref={list} className="m-0 min-h-0 list-none overflow-y-auto p-0 py-1.5" onKeyDown={moveFocus}>
           {found.map((finding) => (
             <li key={`${finding.at.sheet} ${finding.at.row} ${finding.at.column} ${finding.words}`}>
               <FindingRow session={session} finding={finding} onGo={onGo} />

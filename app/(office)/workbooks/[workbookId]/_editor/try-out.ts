@@ -10,6 +10,8 @@ export async function tryOutTally(
   operations: readonly Operation[],
 ): Promise<readonly Change[]> {
   const { workbook } = session
+  // In other units the same figure is another number.
+  if (operations.some(({ kind }) => kind === 'convert-units')) return []
   const names = tallyNames.filter((name) => workbook.names.has(name))
   const after = await session.tryOut(operations, names)
   return names.flatMap((name): Change[] => {

@@ -1,6 +1,7 @@
 'use client'
 
 import { useEffect, useRef, useState } from 'react'
+import type { UnitSystem } from '@/lib/units'
 import type { WorkbookSession } from '../_editor/session-contract'
 import { useSession } from '../_editor/use-session'
 import { type Difference, differences, type Reading, readTally, summary } from './figures'
@@ -8,6 +9,8 @@ import { type Difference, differences, type Reading, readTally, summary } from '
 const shownFor = 8000
 
 interface Shown {
+  /** The system that the readings are in: a conversion of the units changes no figure of the job. */
+  readonly system: UnitSystem
   readonly readings: readonly Reading[]
   readonly changed: ReadonlyMap<string, Difference>
   readonly said: string
@@ -82,7 +85,12 @@ function tone(difference: Difference | undefined): string {
 function useTally(session: WorkbookSession): Shown {
   const { engine } = useSession(session)
   const read = () => readTally(session.workbook, session.named)
-  const [shown, setShown] = useState<Shown>(() => ({ readings: read(), changed: new Map(), said: '' }))
+  const [shown, setShown] = useState<Shown>(() => ({
+    system: session.workbook.system,
+    readings: read(),
+    changed: new Map(),
+    said: '',
+  }))
   const timer = useRef<ReturnType<typeof setTimeout> | undefined>(undefined)
 
   // biome-ignore lint/correctness/useExhaustiveDependencies: `read` reads the session, which is the dependency
@@ -92,11 +100,13 @@ function useTally(session: WorkbookSession): Shown {
     const stop = session.onValues(() => {
       setShown((before) => {
         const readings = read()
-        const changed = quietly
-          ? new Map<string, Difference>()
-          : differences(before.readings, readings, session.workbook, session.named)
+        const { system } = session.workbook
+        const changed =
+          quietly || before.system !== system
+            ? new Map<string, Difference>()
+            : differences(before.readings, readings, session.workbook, session.named)
         if (changed.size === 0 && same(before.readings, readings)) return before
-        return { readings, changed, said: summary(readings, changed) }
+        return { system, readings, changed, said: summary(readings, changed) }
       })
       clearTimeout(timer.current)
       timer.current = setTimeout(
@@ -116,6 +126,9 @@ function useTally(session: WorkbookSession): Shown {
 function same(a: readonly Reading[], b: readonly Reading[]): boolean {
   return (
     a.length === b.length &&
-    a.every((reading, i) => reading.name === b[i]?.name && reading.text === b[i]?.text)
+    a.every(
+      (reading, i) =>
+        reading.name === b[i]?.name && reading.text === b[i]?.text && reading.unit === b[i]?.unit,
+    )
   )
 }

@@ -30,7 +30,7 @@ export interface TryEveryProps {
 /** Every covering of the table on this very house, by price, yearly heat and winter light. Nothing changes until one is chosen. */
 export function TryEvery({ session, part, trials, now, onChoose, onClose, onClosed }: TryEveryProps) {
   const names = useMemo(() => trialNames((name) => session.workbook.names.has(name)), [session])
-  const progress = useOutcomes(trials, names, (operations, asked) => session.tryOut(operations, asked))
+  const progress = useOutcomes(session, trials, names)
   const [marked, setMarked] = useState<string | undefined>(now)
   const [problem, setProblem] = useState<string | undefined>(undefined)
   const figures = useMemo(() => figuresOf(session, names), [session, names])

@@ -1,11 +1,6 @@
 import { useEffect, useState } from 'react'
-import type { CellValue, Operation } from '@/lib/workbook'
+import type { WorkbookSession } from '../_editor/session-contract'
 import { type Outcome, outcomeOf, type Trial, type TrialNames } from './trial'
-
-export type TryOne = (
-  operations: readonly Operation[],
-  names: readonly string[],
-) => Promise<Readonly<Record<string, readonly CellValue[]>>>
 
 export interface Progress {
   readonly outcomes: readonly Outcome[]
@@ -16,27 +11,30 @@ export interface Progress {
 }
 
 /** Tries one after another, in the worker, and shows each as it comes; cancelling keeps what is known so far. */
-export function useOutcomes(trials: readonly Trial[], names: TrialNames, tryOne: TryOne): Progress {
+export function useOutcomes(session: WorkbookSession, trials: readonly Trial[], names: TrialNames): Progress {
+  // What was asked for when the panel opened; the same run for as long as it is open.
+  const [asked] = useState({ session, trials, names })
   const [outcomes, setOutcomes] = useState<readonly Outcome[]>([])
   const [running, setRunning] = useState(true)
   const [stopped, setStopped] = useState<string | undefined>(undefined)
-  const [run] = useState(() => ({ trials, names, tryOne, cancelled: false }))
+  const [cancel, setCancel] = useState<() => void>(() => () => undefined)
 
   useEffect(() => {
-    run.cancelled = false
     let gone = false
-    const asked = Object.values(run.names).filter((name): name is string => name !== undefined)
-    const work = async () => {
-      const found: Outcome[] = []
-      for (const trial of run.trials) {
-        const values = await run.tryOne(trial.operations, asked)
-        if (gone) return
-        if (run.cancelled) break
-        found.push(outcomeOf(trial, run.names, values))
-        setOutcomes([...found])
-      }
-    }
-    work()
+    const wanted = Object.values(asked.names).filter((name): name is string => name !== undefined)
+    const found: Outcome[] = []
+    const lists = asked.trials.map(({ operations }) => operations)
+    const run = asked.session.tryMany(lists, wanted, (index, values) => {
+      const trial = asked.trials[index]
+      if (gone || !trial) return
+      found.push(outcomeOf(trial, asked.names, values))
+      setOutcomes([...found])
+    })
+    setCancel(() => () => {
+      run.cancel()
+      setRunning(false)
+    })
+    run.result
       .catch((error: unknown) => {
         if (!gone) setStopped(error instanceof Error ? error.message : 'The calculation stopped.')
       })
@@ -45,16 +43,9 @@ export function useOutcomes(trials: readonly Trial[], names: TrialNames, tryOne:
       })
     return () => {
       gone = true
+      run.cancel()
     }
-  }, [run])
+  }, [asked])
 
-  return {
-    outcomes,
-    running,
-    ...(stopped === undefined ? {} : { stopped }),
-    cancel: () => {
-      run.cancelled = true
-      setRunning(false)
-    },
-  }
+  return { outcomes, running, ...(stopped === undefined ? {} : { stopped }), cancel }
 }
