@@ -160,8 +160,9 @@ function emitGrid(
       label: `column titles of ${block.table.label}`,
     })
   }
+  const titles = new Set(block.columns.map(({ title }) => title))
   block.rows.forEach((row, offset) => {
-    const unknown = Object.keys(row).find((title) => !block.columns.some((column) => column.title === title))
+    const unknown = Object.keys(row).find((title) => !titles.has(title))
     if (unknown !== undefined) throw new Error(`no column is called ${unknown}`)
     block.columns.forEach((column, index) => {
       const given = row[column.title]

@@ -4,7 +4,6 @@ import { readFile, rename, rm, stat } from 'node:fs/promises'
 import { basename, dirname, join, resolve } from 'node:path'
 import { fail, type Result, succeed } from '../failures'
 import { readCommandLine } from './command-line'
-import { cutsOf, writeCuts } from './cuts/write-cuts.node'
 import { type Estimate, estimate } from './estimate'
 import { quoted } from './nearest'
 import { parseStrictJson } from './strict-json'
@@ -37,13 +36,15 @@ async function answerFiles(
   xlsx: string | undefined,
   cuts: string | undefined,
 ): Promise<Result<void>> {
-  const layout = cuts === undefined ? undefined : await cutsOf(made)
+  // Layout and cutting are read in only where they are asked for.
+  const cutting = cuts === undefined ? undefined : await import('./cuts/write-cuts.node.js')
+  const layout = await cutting?.cutsOf(made)
   if (layout && !layout.ok) return layout
   if (xlsx !== undefined) {
     const written = await writeWorkbook(made, resolve(from, xlsx))
     if (!written.ok) return written
   }
-  if (layout && cuts !== undefined) return writeCuts(layout.value, resolve(from, cuts))
+  if (cutting && layout && cuts !== undefined) return cutting.writeCuts(layout.value, resolve(from, cuts))
   return succeed(undefined)
 }
 

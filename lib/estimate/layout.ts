@@ -88,10 +88,16 @@ function placeGridNames(
   })
 }
 
+const titlesOf = new WeakMap<GridBlock, ReadonlyMap<string, number>>()
+
 export function columnOf(block: GridBlock, title: string): number {
-  const wanted = title.toLowerCase()
-  const index = block.columns.findIndex((column) => column.title.toLowerCase() === wanted)
-  if (index < 0) throw new Error(`no column is called ${title}`)
+  let titles = titlesOf.get(block)
+  if (!titles) {
+    titles = new Map(block.columns.map((column, index) => [column.title.toLowerCase(), index]))
+    titlesOf.set(block, titles)
+  }
+  const index = titles.get(title.toLowerCase())
+  if (index === undefined) throw new Error(`no column is called ${title}`)
   return index
 }
 

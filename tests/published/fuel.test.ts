@@ -75,6 +75,30 @@ describe('fuel', () => {
   )
 })
 
+describe('fuel by degree-days, and what saving it pays', () => {
+  test('SF7: 10,000 ft² at U 0.70 and 0.35, 50 °F for 2520 h: 882 and 441 MMBtu, 11,025 therm, $13,230 and $6,615, 5.7 years (course text, chapter 6; read)', () => {
+    const fresh = openLive({ system: 'us' })
+    fresh.set({ fuel: 'NATURAL-GAS', heater_efficiency: 0.8, fuel_price: 1.2 })
+    // 50 °F for 2520 hours are as many degree-days as 50 · 2520 / 24.
+    fresh.set({ heating_degree_days: (50 * 2520) / 24, night_loss_coefficient: 10_000 * 0.7 })
+    expect(fresh.number('degree_day_heat') / 10).toBeCloseTo(882, 9)
+    expect(fresh.number('degree_day_fuel_quantity')).toBeCloseTo(11_025, 8)
+    const first = fresh.number('degree_day_fuel_cost')
+    expect(first).toBeCloseTo(13_230, 8)
+    fresh.set({ night_loss_coefficient: 10_000 * 0.35 })
+    expect(fresh.number('degree_day_heat') / 10).toBeCloseTo(441, 9)
+    const second = fresh.number('degree_day_fuel_cost')
+    expect(second).toBeCloseTo(6615, 8)
+    // The first two rows of Options with these costs, and 37,500 more to begin with.
+    fresh.setCell('option_first_cost', 0, 0)
+    fresh.setCell('option_first_cost', 1, 37_500)
+    fresh.setCell('option_fuel', 0, first)
+    fresh.setCell('option_fuel', 1, second)
+    expect(Math.abs((fresh.numbers('option_payback')[1] ?? 0) - 5.7)).toBeLessThanOrEqual(0.05)
+    fresh.close()
+  })
+})
+
 describe('[H4] the monthly balance', () => {
   test('loses nothing: what is lost is what is heated and what the sun gives, less the surplus', () => {
     const fresh = openLive({ system: 'us' })
@@ -117,6 +141,26 @@ describe('[P4] money over the years', () => {
     expect(
       (fresh.numbers('option_renewals')[0] ?? 0) / (fresh.numbers('option_first_cost')[0] ?? 1),
     ).toBeCloseTo(4, 10)
+    fresh.close()
+  })
+
+  test('SM2: $516,233 over 20 years at 3 % with the printed factors (NIST Handbook 135, example of heating; from memory, recomputes)', () => {
+    const fresh = openLive({ system: 'us' })
+    fresh.set({ discount_rate: 0.03, study_years: 20, fuel_escalation_rate: 0 })
+    expect(Math.abs(fresh.number('upkeep_present_factor') - 14.88)).toBeLessThanOrEqual(0.005)
+    expect(Math.abs(fresh.number('end_present_factor') - 0.554)).toBeLessThanOrEqual(5e-4)
+    const row = 1
+    fresh.setCell('option_first_cost', row, 103_000)
+    fresh.setCell('option_fuel', row, 20_000)
+    fresh.setCell('option_upkeep', row, 7000)
+    fresh.setCell('option_left', row, 3500)
+    // A fan of 12,000 in the twelfth year.
+    fresh.setCell('option_renewals', row, '=12000*ROUND(1.03^-12,3)')
+    fresh.set({ fuel_present_factor: 15.13 })
+    // With the workbook's own factors within $60, with the printed ones to the dollar.
+    expect(Math.abs((fresh.numbers('option_life_cycle')[row] ?? 0) - 516_233)).toBeLessThanOrEqual(60)
+    fresh.set({ upkeep_present_factor: 14.88, end_present_factor: 0.554 })
+    expect(Math.abs((fresh.numbers('option_life_cycle')[row] ?? 0) - 516_233)).toBeLessThanOrEqual(1)
     fresh.close()
   })
 

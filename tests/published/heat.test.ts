@@ -1,7 +1,7 @@
 import { describe, expect, test, vi } from 'vitest'
 import type { WorkbookRequest } from '@/lib/estimate'
 import { convert } from '@/lib/units'
-import { compute } from '../lib/estimate/compute'
+import { compute, type Live, openLive } from '../lib/estimate/compute'
 
 vi.setConfig({ testTimeout: 60_000 })
 
@@ -187,5 +187,64 @@ describe('[H2] published heat loss checks', () => {
       )
     const saving = roofLoss(0) - roofLoss(screen)
     expect(Math.abs(saving / 63_000 - 1)).toBeLessThanOrEqual(1e-4)
+  })
+
+  /** Areas as the source gives them, typed over those of the frame: a house that is stated by its areas alone. */
+  const stated = (live: Live, areas: Readonly<Record<number, number>>): void => {
+    for (let row = 0; row < 8; row += 1) live.setCell('surface_gross_area', row, areas[row] ?? 0)
+  }
+  const [frontRoof, frontWall, backWall, leftEnd, rightEnd] = [0, 3, 4, 5, 6]
+
+  test('SH1, SH1c: components of a 30 × 96 × 12 ft house are 261,240 Btu/h, the heater 339,612 (course text 1.1, 2.1; read)', () => {
+    const live = openLive({ system: 'us', overrides: withU({ 'FILM-2': 'U 0.70', 'PANEL-50': 'R 20' }) })
+    live.set({ outside_design_temperature: -10, inside_night_temperature: 60, air_changes_per_hour: 0 })
+    live.set({ roof_covering: 'FILM-2', side_covering: 'FILM-2', frame_width: 30, frame_length: 96 })
+    stated(live, { [frontRoof]: 3000, [frontWall]: 2100, [backWall]: 360 })
+    live.setCell('surface_covering', backWall, 'PANEL-50')
+    expect(live.number('conduction_loss')).toBeCloseTo(102_900 + 147_000 + 1260, 6)
+    // The workbook has the earth floor in its perimeter: 2880 ft² × 0.10 over 35 °F, as a factor of 252 ft over 70 °F.
+    live.set({ perimeter_heat_loss_factor: (2880 * 0.1 * 35) / (252 * 70), heater_allowance: 0.3 })
+    expect(live.number('design_heat_loss')).toBeCloseTo(261_240, 6)
+    expect(live.number('heater_output')).toBeCloseTo(339_612, 6)
+    live.close()
+  })
+
+  test('SH2: ends 352 ft² at 0.53 and roof 3456 ft² at 0.70 are 2605.76 Btu/(h·°F) (trade article; read)', () => {
+    const live = openLive({ system: 'us', overrides: withU({ 'FILM-2': 'U 0.70', 'PC-TWIN-8': 'U 0.53' }) })
+    live.set({ roof_covering: 'FILM-2', outside_design_temperature: 0, inside_night_temperature: 60 })
+    stated(live, { [frontRoof]: 3456, [leftEnd]: 176, [rightEnd]: 176 })
+    expect(live.number('envelope_conductance')).toBeCloseTo(2605.76, 8)
+    expect(live.number('conduction_loss')).toBeCloseTo(156_345.6, 6)
+    live.close()
+  })
+
+  test('SH6: 12 × 8 m, eave 4, ridge 7 m: 11,129.3 W (published exercise; inputs read, answer computed)', () => {
+    const live = openLive({
+      system: 'si',
+      inputs: {
+        frame_type: 'gable',
+        frame_width: 8,
+        frame_length: 12,
+        eave_height: 4,
+        ridge_height: 7,
+        roof_covering: 'GLASS-2',
+        outside_design_temperature: 2,
+        inside_night_temperature: 18,
+        air_changes_per_hour: 3,
+        // A floor of 96 m² at 0.3 W/(m²·K), around 40 m.
+        perimeter_heat_loss_factor: (96 * 0.3) / 40,
+      },
+      openings: [{ surface: 'Front wall', kind: 'window', width: 1.8, height: 0.6, count: 2, u_value: 2.8 }],
+      overrides: withU({ 'GLASS-2': 'U 0.5 W/(m²·K)', 'PC-TWIN-8': 'U 0.4 W/(m²·K)' }),
+    })
+    // The exercise takes 1200 J/(m³·K) for air.
+    live.set({ air_heat_capacity: 1200 / 3600 })
+    expect(live.number('roof_slope_length')).toBeCloseTo(5, 12)
+    expect(live.number('enclosed_volume')).toBeCloseTo(528, 10)
+    expect(live.number('conduction_loss')).toBeCloseTo(1163.776 + 96.768 + 960, 8)
+    expect(live.number('perimeter_loss')).toBeCloseTo(460.8, 10)
+    expect(live.number('infiltration_loss')).toBeCloseTo(8448, 8)
+    expect(live.number('design_heat_loss')).toBeCloseTo(11_129.344, 6)
+    live.close()
   })
 })

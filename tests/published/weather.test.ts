@@ -52,6 +52,26 @@ describe('snow and wind: preliminary screens', () => {
     us.set({ ...gable(degrees), snow_thermal_factor: thermal, roof_is_slippery: slippery })
     expect(Math.abs(us.number('roof_slope_factor') - expected)).toBeLessThanOrEqual(1e-4)
   })
+  test('SW7: a heated house under R 2 and of risk category I takes Ct 0.85 and Is 0.8: 14.28 of 30 psf (ASCE 7 table 7.3-2; from memory)', () => {
+    const fresh = openLive({ system: 'us', inputs: { snow_thermal_factor: 0.85 } })
+    expect(fresh.number('importance_factor')).toBe(0.8)
+    expect(fresh.number('flat_roof_snow_load')).toBeCloseTo(0.7 * 0.85 * 0.8 * 30, 10)
+    fresh.close()
+  })
+  test.each([
+    [20, 1, 0.8, 0.8],
+    [45, 1, 0.4, 0.4],
+    [45, 3, 0.4, 1.2],
+    [70, 1, 0, 0],
+    [10, 1.5, 0.8, 1.2],
+  ])(
+    'SW12: %d° under %d kN/m² has shape %d and carries %d kN/m² (EN 1991-1-3 5.3; read-2)',
+    (pitch, ground, shape, load) => {
+      si.set({ ...gable(pitch), ground_snow_load: ground, snow_exposure_factor: 1, snow_thermal_factor: 1 })
+      expect(si.number('snow_shape_coefficient')).toBeCloseTo(shape, 10)
+      expect(si.number('european_roof_snow_load')).toBeCloseTo(load, 10)
+    },
+  )
   test.each([
     ['C', 15, 0.85],
     ['C', 30, 0.98],
@@ -74,6 +94,34 @@ describe('snow and wind: preliminary screens', () => {
       site_elevation: 0,
     })
     expect(Math.abs(us.number('velocity_pressure') - 28.27)).toBeLessThanOrEqual(0.05)
+  })
+})
+
+describe('the bend of sheets between purlins', () => {
+  /** A strip 1 m wide of EI 210,000 N·m² bends by a twentieth of this span under 1 kPa: 5wL⁴/384EI = L/20. */
+  const span = ((384 * 210_000) / (5 * 1000 * 20)) ** (1 / 3)
+  const loaded = {
+    roof_design_pressure: 0.5,
+    purlin_spacing: 3,
+    roof_covering: 'PC-TWIN-10',
+    purlin_spans: 'one',
+  }
+
+  test('SW10, SW11: 500 N/m on 3 m of EI 210,000 N·m² bends 2.511 mm, on two spans 1.0445 mm (AISC Manual table 3-23; formula from memory)', () => {
+    const fresh = openLive({ system: 'si' })
+    fresh.setRow('coverings', 'PC-TWIN-10', 'span by stiffness', span)
+    fresh.set(loaded)
+    expect(Math.abs(fresh.number('roof_sheet_bend') / 2.511 - 1)).toBeLessThanOrEqual(1e-3)
+    // The spacing whose bend is just the limit is that spacing.
+    fresh.set({ deflection_limit: 0.002511 / 3 })
+    expect(fresh.number('stiffness_spacing')).toBeCloseTo(3, 3)
+    fresh.set({ purlin_spans: 'two' })
+    // SW11: two equal spans under the same load; the moment over the middle is that of one span, so strength stays.
+    expect(Math.abs(fresh.number('roof_sheet_bend') / 1.0445 - 1)).toBeLessThanOrEqual(5e-3)
+    const strength = fresh.number('strength_spacing')
+    fresh.set({ purlin_spans: 'one' })
+    expect(fresh.number('strength_spacing')).toBe(strength)
+    fresh.close()
   })
 })
 
@@ -134,6 +182,15 @@ describe('sheets', () => {
     expect(us.text('bend_check')).toBe('in order')
     us.set({ roof_covering: 'FILM-2', frame_width: 4, ridge_height: 2 })
     expect(us.text('bend_check')).toBe('in order')
+  })
+  test('SP5, SP12: sheets are fitted at 55 to 70 °F (trade data sheets; read), screwed at 300 to 500 mm (from memory)', () => {
+    const fresh = openLive({ system: 'us' })
+    expect(fresh.number('fitting_temperature')).toBeGreaterThanOrEqual(55)
+    expect(fresh.number('fitting_temperature')).toBeLessThanOrEqual(70)
+    const spacing = convert(fresh.number('fixing_spacing'), 'length', 'us', 'si')
+    expect(spacing).toBeGreaterThanOrEqual(0.3)
+    expect(spacing).toBeLessThanOrEqual(0.5)
+    fresh.close()
   })
   test('the screens say the same in both systems', () => {
     expect(convert(us.number('reference_pressure'), 'pressure', 'us', 'si')).toBeCloseTo(1, 12)

@@ -33,7 +33,7 @@ export const clearRows: readonly GridRow[] = [
   covering('FILM-1-IR', 'Polyethylene film, single, infrared', film, {
     layers: 1,
     thick: 0.15,
-    r: 0.95,
+    r: 0.98,
     light: 0.86,
     diffuse: 0.79,
     look: 'diffusing',
@@ -123,7 +123,7 @@ export const clearRows: readonly GridRow[] = [
   covering('ACRYL-TWIN-16', 'Acrylic twin-wall, 16 mm', acrylic, {
     layers: 2,
     thick: 16,
-    r: 2.2,
+    r: 1.79,
     light: 0.86,
     diffuse: 0.76,
     look: 'clear',
@@ -133,7 +133,7 @@ export const clearRows: readonly GridRow[] = [
     stock: 'ACRYL-TWIN-16-16',
     profiles: size(16),
     price: 5.6,
-    source: memory,
+    source: ashrae,
   }),
   covering('PANEL-50', 'Insulated panel, opaque, 50 mm', panel, {
     layers: 1,

@@ -10,6 +10,8 @@ export interface Computed {
   /** The numbers among the values of a name; of cells that hold none, nothing. */
   readonly numbersOf: (name: string) => readonly number[]
   readonly text: (name: string) => string
+  /** What a table holds in the row of a code, in the workbook's units. */
+  readonly inTable: (table: string, code: string, column: string) => CellValue
   readonly value: (name: string) => CellValue
   readonly all: () => ReadonlyMap<string, readonly CellValue[]>
 }
@@ -56,6 +58,13 @@ export function openLive(request: WorkbookRequest): Live {
     numbers: (name) => values(name).map((value) => asNumber(value, name)),
     numbersOf: (name) => values(name).filter((value) => typeof value === 'number'),
     text: (name) => String(values(name)[0]),
+    inTable: (table, code, column) => {
+      const titles = values(`${table}_columns`)
+      const [cells, at] = [values(table), titles.indexOf(column)]
+      const row = cells.findIndex((value, index) => index % titles.length === 0 && value === code)
+      if (row < 0 || at < 0) throw new Error(`no ${column} of ${code}`)
+      return cells[row + at] ?? null
+    },
     value: (name) => values(name)[0] ?? null,
     all: () => new Map([...workbook.names.keys()].map((name) => [name, values(name)])),
     set: (inputs) => {
