@@ -97,7 +97,44 @@ export type ArgumentValues = Readonly<Record<string, string | number | boolean>>
 export type Effect =
   | { readonly kind: 'operations'; readonly label: string; readonly operations: readonly Operation[] }
   | { readonly kind: 'view'; readonly change: ViewChange }
+  | SolveEffect
+  | TryEveryEffect
   | { readonly kind: 'refused'; readonly text: string }
+
+/** To be searched for with the engine; `solveFor` does it, over try-outs that set the input. Numbers are in the workbook's units. */
+export interface SolveEffect {
+  readonly kind: 'solve'
+  readonly label: string
+  /** The named result, and what it is to be. */
+  readonly result: string
+  readonly target: number
+  readonly tolerance: number
+  /** The named input that is changed, its value now and how far it may go. */
+  readonly input: string
+  readonly from: number
+  readonly low?: number
+  readonly high?: number
+}
+
+/** To be tried out one by one and shown side by side; choosing a trial is doing its operations under its label. */
+export interface TryEveryEffect {
+  readonly kind: 'try-every'
+  readonly label: string
+  /** What is covered, in words: "the whole house". */
+  readonly part: string
+  readonly trials: readonly Trial[]
+  /** Code of the trial that is there now, where it is one. */
+  readonly now: string | undefined
+  /** Named results worth comparing, of those that the workbook has: price, yearly heat, winter light. */
+  readonly names: readonly string[]
+}
+
+export interface Trial {
+  readonly code: string
+  readonly title: string
+  readonly label: string
+  readonly operations: readonly Operation[]
+}
 
 /** Never logged. */
 export type ViewChange =

@@ -1,9 +1,11 @@
-import type { NamedValue, Operation } from '../workbook'
-import { all, hasInputs, mayChange, sheetIsOpen } from './availability'
-import type { ArgumentOption, ArgumentValues, Command, CommandContext, Effect } from './command'
-import { labelInSentence, labelOf, namedInputs, setArea } from './inputs'
-import { readValues, showNamed } from './measures'
+import type { NamedValue } from '../workbook'
+import { all, hasInputs, mayChange } from './availability'
+import type { ArgumentOption, ArgumentValues, Command, CommandContext } from './command'
+import { coveringInputs, coveringTitle, givenParts, partOptions, sayPart } from './coverings'
+import { labelInSentence, labelOf, namedInputs } from './inputs'
+import { showNamed } from './measures'
 import { describeArea } from './references'
+import { refused, setNamed } from './set-named'
 import { choicesOf } from './tables'
 
 function givenInput({ workbook }: CommandContext, args: ArgumentValues): NamedValue | undefined {
@@ -44,91 +46,6 @@ const setInput: Command = {
   },
 }
 
-/** Sets every one of `inputs` to what was typed or picked; refused whole when one of them may not be set. */
-function setNamed(
-  context: CommandContext,
-  inputs: readonly NamedValue[],
-  given: string | number | boolean,
-  label: string,
-): Effect {
-  const operations: Operation[] = []
-  for (const named of inputs) {
-    const open = sheetIsOpen(context, named.area.sheet)
-    if (open !== true) return refused(open)
-    const options = choicesOf(context, named)
-    if (options) {
-      const picked = options.find((option) => option.value === String(given))
-      if (!picked) return refused(`${labelOf(named)} takes one of: ${few(options)}`)
-      operations.push(setArea(named.area, [ofKind(named, picked.value)]))
-      continue
-    }
-    const read = typeof given === 'string' ? readValues(context, named, given) : undefined
-    if (read && !read.ok) return refused(read.failure.text)
-    operations.push(setArea(named.area, read?.value ?? [given]))
-  }
-  return { kind: 'operations', label, operations }
-}
-
-/** Choices are written as text; true / false and whole numbers go into the cell as what they are. */
-function ofKind(named: NamedValue, value: string): string | number | boolean {
-  if (named.quantity === 'boolean') return value === 'true'
-  if (named.quantity === 'text' || value.trim() === '') return value
-  const number = Number(value)
-  return Number.isFinite(number) ? number : value
-}
-
-function few(options: readonly ArgumentOption[]): string {
-  const shown = options.slice(0, 8).map(({ value }) => value)
-  return shown.join(', ') + (options.length > shown.length ? ', …' : '')
-}
-
-function refused(text: string): Effect {
-  return { kind: 'refused', text }
-}
-
-/** Parts of the house that take a covering: the inputs called `…_covering`. */
-const partWords: Readonly<Record<string, string>> = { roof: 'roof', side: 'sides', end: 'ends' }
-
-function coveringInputs(context: CommandContext): readonly NamedValue[] {
-  return namedInputs(context).filter(({ name }) => name.endsWith('_covering'))
-}
-
-function partOf(named: NamedValue): string {
-  return named.name.slice(0, -'_covering'.length)
-}
-
-function partOptions(context: CommandContext): readonly ArgumentOption[] {
-  const inputs = coveringInputs(context)
-  const parts = inputs.map((named) => {
-    const part = partOf(named)
-    return {
-      value: part,
-      title: partWords[part] ?? part.replaceAll('_', ' '),
-      detail: `now ${coveringTitle(context, named)}`,
-      synonyms: [part, `${part} walls`, labelOf(named)],
-    }
-  })
-  if (inputs.length < 2) return parts
-  const everything = {
-    value: 'all',
-    title: 'the whole house',
-    detail: parts.map(({ title }) => title).join(', '),
-    synonyms: ['all', 'everything', 'house', 'whole'],
-  }
-  return [...parts, everything]
-}
-
-function coveringTitle(context: CommandContext, named: NamedValue): string {
-  const code = showNamed(context, named)
-  return choicesOf(context, named)?.find(({ value }) => value === code)?.title ?? code
-}
-
-function givenParts(context: CommandContext, args: ArgumentValues): readonly NamedValue[] {
-  const inputs = coveringInputs(context)
-  const part = args.part
-  return part === 'all' || part === undefined ? inputs : inputs.filter((named) => partOf(named) === part)
-}
-
 const cover: Command = {
   id: 'cover',
   title: 'Cover roof, sides or ends with …',
@@ -165,9 +82,7 @@ const cover: Command = {
   run: (context, args) => {
     const inputs = givenParts(context, args)
     if (inputs.length === 0) return refused('That part of the house is no longer there')
-    const part = String(args.part ?? 'all')
-    const said = part === 'all' ? 'the whole house' : (partWords[part] ?? part)
-    return setNamed(context, inputs, args.covering ?? '', `Cover ${said} with ${args.covering}`)
+    return setNamed(context, inputs, args.covering ?? '', `Cover ${sayPart(args)} with ${args.covering}`)
   },
 }
 

@@ -4,12 +4,16 @@ import { editCommands } from './edit-commands'
 import { estimateCommands } from './estimate-commands'
 import { goToCommands } from './go-to-commands'
 import { sheetCommands } from './sheet-commands'
+import { solveCommand } from './solve-command'
+import { tryEvery } from './try-every-command'
 import { accountCommands, viewCommands } from './view-commands'
 import { workbookCommands } from './workbook-commands'
 
 /** Every command there is. Palette, context menu and key map render these objects and no others. */
 export const commands: readonly Command[] = [
   ...estimateCommands,
+  solveCommand,
+  tryEvery,
   ...goToCommands,
   ...editCommands,
   ...sheetCommands,

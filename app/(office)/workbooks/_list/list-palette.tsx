@@ -32,7 +32,7 @@ export function ListPalette({
       onRun={(command, args) => {
         const effect = command.run(context, args)
         if (effect.kind === 'refused') return effect.text
-        if (effect.kind === 'operations') return 'Open a workbook first.'
+        if (effect.kind !== 'view') return 'Open a workbook first.'
         const refused = go(effect.change, (address) => router.push(address))
         if (refused === undefined) onClose()
         return refused
