@@ -30,6 +30,10 @@ export function runEffect(reach: EffectReach, effect: Effect): Result<void> {
       return reach.session.dispatch(effect.label, effect.operations)
     case 'refused':
       return fail('invalid', effect.text)
+    case 'solve':
+    case 'try-every':
+      reach.openPanel(effect)
+      return succeed(undefined)
     case 'view':
       changeView(reach, effect.change)
       return succeed(undefined)

@@ -73,7 +73,7 @@ function FindingRow({
       type="button"
       data-finding
       onClick={() => onGo(goTo)}
-      className="flex w-full items-baseline gap-3 px-5 py-2 text-left hover:bg-frost focus-visible:bg-frost focus-visible:outline-offset-[-2px] max-sm:flex-wrap"
+      className="flex w-full items-baseline gap-3 px-5 py-2 text-left hover:bg-frost focus-visible:bg-frost focus-visible:outline-offset-[-2px] max-sm:flex-wrap max-sm:gap-y-0.5"
     >
       <span className={`w-24 shrink-0 text-[0.8125rem] ${tone}`}>
         <span aria-hidden="true" className="mr-1.5 inline-block w-3 text-center font-semibold">
@@ -81,8 +81,10 @@ function FindingRow({
         </span>
         {word}
       </span>
-      <span className="min-w-0 flex-1 first-letter:uppercase max-sm:basis-2/3">{finding.words}</span>
-      <span className="figure shrink-0 text-[0.8125rem] text-quiet max-sm:pl-24">
+      <span className="min-w-0 flex-1 first-letter:uppercase max-sm:order-3 max-sm:basis-full">
+        {finding.words}
+      </span>
+      <span className="figure shrink-0 text-[0.8125rem] text-quiet max-sm:ml-auto">
         <span className="sr-only">go to </span>
         {place(goTo)}
         <span className="sr-only">{elsewhere}</span>

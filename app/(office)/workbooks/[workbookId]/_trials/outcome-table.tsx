@@ -1,7 +1,8 @@
 'use client'
 
 import type { KeyboardEvent } from 'react'
-import type { Outcome, Trial } from './trial'
+import type { Trial } from '@/lib/commands'
+import type { Outcome } from './trial'
 import type { FigureWords } from './try-every'
 
 /** The plot in figures, the cheapest first. Arrow keys go from row to row, Enter chooses. */

@@ -2,7 +2,7 @@
 
 import { useEffect, useState } from 'react'
 import { Button } from '@/app/_ui/button'
-import { labelOf } from '@/lib/commands'
+import { labelInSentence, labelOf, type SolveEffect } from '@/lib/commands'
 import { type FormatOptions, formatQuantity } from '@/lib/units'
 import { type NamedValue, type Operation, solveFor } from '@/lib/workbook'
 import { commandContext } from '../_editor/command-context'
@@ -13,22 +13,13 @@ import { changeWords, differs } from '../_palette/change-words'
 import type { Change } from '../_palette/palette-props'
 import { currencyOf } from '../_tally/figures'
 
-/** Which result is to come to what, by changing which input; numbers are in the workbook's units. */
-export interface SolveAsked {
-  readonly result: NamedValue
-  readonly target: number
-  readonly tolerance: number
-  readonly input: NamedValue
-  readonly low?: number
-  readonly high?: number
-}
-
 type State =
   | { readonly kind: 'working'; readonly tries: number }
   | { readonly kind: 'failed'; readonly text: string }
   | {
       readonly kind: 'found'
       readonly input: number
+      readonly label: string
       readonly operations: readonly Operation[]
       readonly changes: readonly Change[]
     }
@@ -42,7 +33,7 @@ export function Solve({
   onClosed,
 }: {
   readonly session: WorkbookSession
-  readonly asked: SolveAsked
+  readonly asked: SolveEffect
   /** Sets it; the words of a refusal stay in the panel. */
   readonly onSet: (label: string, operations: readonly Operation[]) => string | undefined
   readonly onClose: () => void
@@ -50,13 +41,16 @@ export function Solve({
 }) {
   const state = useSolved(session, asked)
   const [problem, setProblem] = useState<string | undefined>(undefined)
-  const { result, input, target } = asked
+  const { target, from } = asked
+  const result = session.workbook.names.get(asked.result)
+  const input = session.workbook.names.get(asked.input)
   const show = shower(session)
-  const now = session.named(input.name)?.[0] ?? null
+  if (!result || !input) return null
+  const inputWords = labelInSentence(input)
   return (
     <Panel
       title="Solve for"
-      about={`${labelOf(result)} to come to ${show(target, result)}, by changing ${labelOf(input).toLowerCase()} alone.`}
+      about={`${labelOf(result)} to come to ${show(target, result)}, by changing ${inputWords} alone.`}
       onClose={onClose}
       onClosed={onClosed}
     >
@@ -72,8 +66,7 @@ export function Solve({
           <dl className="grid grid-cols-[auto_1fr] gap-x-6 gap-y-1.5">
             <dt className="font-semibold">{labelOf(input)}</dt>
             <dd className="figure m-0 font-semibold">
-              {typeof now === 'number' ? `${show(now, input)} → ` : ''}
-              {show(state.input, input)}
+              {show(from, input)} → {show(state.input, input)}
             </dd>
             {state.changes.filter(differs).map((change) => (
               <div key={change.name} className="contents">
@@ -92,14 +85,8 @@ export function Solve({
       <footer className="flex flex-wrap items-center justify-end gap-3 border-line border-t px-5 py-3">
         <Button onClick={onClose}>{state.kind === 'working' ? 'Stop' : 'Leave it as it is'}</Button>
         {state.kind === 'found' ? (
-          <Button
-            tone="action"
-            autoFocus
-            onClick={() =>
-              setProblem(onSet(`Set ${labelOf(input).toLowerCase()} by solving`, state.operations))
-            }
-          >
-            Set {labelOf(input).toLowerCase()}
+          <Button tone="action" autoFocus onClick={() => setProblem(onSet(state.label, state.operations))}>
+            Set {inputWords}
           </Button>
         ) : null}
       </footer>
@@ -107,12 +94,12 @@ export function Solve({
   )
 }
 
-function useSolved(session: WorkbookSession, asked: SolveAsked): State {
+function useSolved(session: WorkbookSession, asked: SolveEffect): State {
   const [state, setState] = useState<State>({ kind: 'working', tries: 0 })
   const [run] = useState({ session, asked })
   useEffect(() => {
     let gone = false
-    void solve(
+    void look(
       run.session,
       run.asked,
       () => gone,
@@ -129,45 +116,34 @@ function useSolved(session: WorkbookSession, asked: SolveAsked): State {
   return state
 }
 
-async function solve(
+async function look(
   session: WorkbookSession,
-  asked: SolveAsked,
+  asked: SolveEffect,
   isGone: () => boolean,
   onTry: (count: number) => void,
 ): Promise<State> {
-  const { result, input, target, tolerance, low, high } = asked
-  const from = session.named(input.name)?.[0]
-  if (typeof from !== 'number') {
-    return { kind: 'failed', text: `${labelOf(input)} holds no number to begin from.` }
-  }
-  let tries = 0
+  const input = session.workbook.names.get(asked.input)
+  const result = session.workbook.names.get(asked.result)
+  if (!input || !result) return { kind: 'failed', text: 'What was to be solved is no longer there.' }
   const show = shower(session)
+  let tries = 0
   const solved = await solveFor(
     async (value) => {
       if (isGone()) throw new Error('It was stopped.')
-      const values = await session.tryOut(setTo(input, value), [result.name])
+      const values = await session.tryOut(setTo(input, value), [asked.result])
       tries += 1
       if (!isGone()) onTry(tries)
-      return values[result.name]?.[0] ?? null
+      return values[asked.result]?.[0] ?? null
     },
-    {
-      from,
-      target,
-      tolerance,
-      ...(low === undefined ? {} : { low }),
-      ...(high === undefined ? {} : { high }),
-      sayInput: (value) => show(value, input),
-      sayResult: (value) => show(value, result),
-    },
+    { ...asked, sayInput: (value) => show(value, input), sayResult: (value) => show(value, result) },
   )
   if (!solved.ok) return { kind: 'failed', text: solved.failure.text }
-  const operations = setTo(input, solved.value.input)
-  return {
-    kind: 'found',
-    input: solved.value.input,
-    operations,
-    changes: await tryOutTally(session, operations),
-  }
+  const found = solved.value.input
+  if (found === asked.from) return { kind: 'failed', text: 'It is there already: nothing has to be changed.' }
+  const operations = setTo(input, found)
+  const changes = await tryOutTally(session, operations)
+  const label = `Set ${labelInSentence(input)} to ${show(found, input)}`
+  return { kind: 'found', input: found, label, operations, changes }
 }
 
 function setTo({ area: { sheet, row, column } }: NamedValue, input: number): readonly Operation[] {

@@ -1,11 +1,5 @@
-import type { CellValue, Operation } from '@/lib/workbook'
-
-/** One thing to try on the whole workbook: a covering, and what setting it would do. */
-export interface Trial {
-  readonly code: string
-  readonly title: string
-  readonly operations: readonly Operation[]
-}
+import type { Trial } from '@/lib/commands'
+import type { CellValue } from '@/lib/workbook'
 
 /** What a trial came to; figures by name. A figure is undefined where the workbook gives no number. */
 export interface Outcome {

@@ -3,24 +3,20 @@
 import dynamic from 'next/dynamic'
 import { useMemo, useState } from 'react'
 import { Button } from '@/app/_ui/button'
-import { labelOf } from '@/lib/commands'
+import { labelOf, type Trial, type TryEveryEffect } from '@/lib/commands'
 import { formatQuantity, isMoney, unitOf } from '@/lib/units'
 import { Panel } from '../_editor/panel'
 import type { WorkbookSession } from '../_editor/session-contract'
 import { currencyOf } from '../_tally/figures'
 import { OutcomeTable } from './outcome-table'
-import { type Aspect, byPrice, type Trial, trialNames } from './trial'
+import { type Aspect, byPrice, trialNames } from './trial'
 import { type Progress, useOutcomes } from './use-outcomes'
 
 const CoveringPlot = dynamic(() => import('./covering-plot'), { ssr: false })
 
 export interface TryEveryProps {
   readonly session: WorkbookSession
-  /** What is covered, in words: "the whole house". */
-  readonly part: string
-  readonly trials: readonly Trial[]
-  /** Code of the covering that is there now, where it is one. */
-  readonly now: string | undefined
+  readonly asked: TryEveryEffect
   /** Sets one; the words of a refusal stay in the panel. */
   readonly onChoose: (trial: Trial) => string | undefined
   readonly onClose: () => void
@@ -28,7 +24,8 @@ export interface TryEveryProps {
 }
 
 /** Every covering of the table on this very house, by price, yearly heat and winter light. Nothing changes until one is chosen. */
-export function TryEvery({ session, part, trials, now, onChoose, onClose, onClosed }: TryEveryProps) {
+export function TryEvery({ session, asked, onChoose, onClose, onClosed }: TryEveryProps) {
+  const { part, trials, now } = asked
   const names = useMemo(() => trialNames((name) => session.workbook.names.has(name)), [session])
   const progress = useOutcomes(session, trials, names)
   const [marked, setMarked] = useState<string | undefined>(now)

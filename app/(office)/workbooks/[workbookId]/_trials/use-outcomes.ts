@@ -1,6 +1,7 @@
 import { useEffect, useState } from 'react'
+import type { Trial } from '@/lib/commands'
 import type { WorkbookSession } from '../_editor/session-contract'
-import { type Outcome, outcomeOf, type Trial, type TrialNames } from './trial'
+import { type Outcome, outcomeOf, type TrialNames } from './trial'
 
 export interface Progress {
   readonly outcomes: readonly Outcome[]
