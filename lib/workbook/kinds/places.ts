@@ -25,8 +25,28 @@ export function kindOfReference(workbook: Workbook, from: CellAddress, reference
   return area ? kindOfArea(sheet, area) : 'unknown'
 }
 
+/** Kinds of areas, while one workbook is looked through: the same columns are read by very many formulas. */
+let areas: Map<string, Kind> | undefined
+
+/** Runs something that changes no workbook, and looks at each area once meanwhile. */
+export function lookingOnce<T>(run: () => T): T {
+  areas = new Map()
+  try {
+    return run()
+  } finally {
+    areas = undefined
+  }
+}
+
 /** The one kind that all figures of an area are of; unknown when they differ, or when one of them is not known. */
 export function kindOfArea(sheet: Sheet, area: Omit<Area, 'sheet'>): Kind {
+  const key = `${sheet.id} ${area.row} ${area.column} ${area.rowCount} ${area.columnCount}`
+  const kind = areas?.get(key) ?? commonKind(sheet, area)
+  areas?.set(key, kind)
+  return kind
+}
+
+function commonKind(sheet: Sheet, area: Omit<Area, 'sheet'>): Kind {
   if (area.rowCount * area.columnCount > mostCells) return 'unknown'
   let found: Kind | undefined
   for (let row = area.row; row < area.row + area.rowCount; row += 1) {

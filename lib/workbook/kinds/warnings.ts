@@ -4,7 +4,7 @@ import { isFormula, type Workbook } from '../model'
 import { parseFormula } from '../words/expression'
 import { inferKind } from './infer'
 import { clash, isKnown, kindOfQuantity, sayKind } from './kind'
-import { kindOfName } from './places'
+import { kindOfName, lookingOnce } from './places'
 
 export interface QuantityWarning {
   readonly sheet: string
@@ -20,6 +20,10 @@ export interface QuantityWarning {
  * K5 What cannot be known is passed over: no warning is worth more than a false one.
  */
 export function quantityWarnings(workbook: Workbook): QuantityWarning[] {
+  return lookingOnce(() => everyWarning(workbook))
+}
+
+function everyWarning(workbook: Workbook): QuantityWarning[] {
   const warnings: QuantityWarning[] = []
   const names = namesByCell(workbook)
   for (const sheet of workbook.sheets) {
