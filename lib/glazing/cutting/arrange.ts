@@ -1,4 +1,4 @@
-import type { SheetPiece } from './sheets'
+import type { SheetPiece } from './problem'
 
 /** A piece on its sheet: its lower left corner as cut, and whether it is turned half round. */
 export interface PlacedPiece {

@@ -178,3 +178,13 @@ export function oddOnes({ nests }: Pick<Instance, 'nests'>, counts: readonly num
   }
   return sum
 }
+
+/** A piece of a sheet, by the rectangle around it. */
+export interface SheetPiece {
+  readonly mark: string
+  readonly width: number
+  /** Of the rectangle around it, along the flutes. */
+  readonly length: number
+  /** A straight slanted end: signed, positive when the right side is the longer one. */
+  readonly rise?: number
+}

@@ -2,17 +2,8 @@ import { fail, type Result, succeed } from '../../failures'
 import { arrange, type Level, slantedKerf } from './arrange'
 import { relax } from './column-generation'
 import type { SolveIntegerProgram } from './exact'
-import { type CuttingProblem, type Nest, toInstance } from './problem'
+import { type CuttingProblem, type Nest, type SheetPiece, toInstance } from './problem'
 import { firstCut, solveCutting, stepUp } from './solve'
-
-export interface SheetPiece {
-  readonly mark: string
-  readonly width: number
-  /** Of the rectangle around it, along the flutes. */
-  readonly length: number
-  /** A straight slanted end: signed, positive when the right side is the longer one. */
-  readonly rise?: number
-}
 
 export interface SheetStock {
   readonly width: number

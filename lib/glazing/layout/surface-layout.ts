@@ -1,5 +1,6 @@
 import { type Result, succeed } from '../../failures'
-import { type SheetPiece, type SheetStock, sheetEstimate } from '../cutting/sheets'
+import type { SheetPiece } from '../cutting/problem'
+import { type SheetStock, sheetEstimate } from '../cutting/sheets'
 import type { PlacedOpening } from '../geometry/openings'
 import { boundsOf, type Polygon } from '../geometry/polygon'
 import type { Surface } from '../geometry/surfaces'

@@ -2,7 +2,8 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { slantedKerf } from '@/lib/glazing/cutting/arrange'
 import { loadIntegerProgram } from '@/lib/glazing/cutting/highs.node'
-import { cutSheets, type SheetPiece, type SheetStock } from '@/lib/glazing/cutting/sheets'
+import type { SheetPiece } from '@/lib/glazing/cutting/problem'
+import { cutSheets, type SheetStock } from '@/lib/glazing/cutting/sheets'
 
 const kerf = 0.125
 const width = 48
