@@ -13,8 +13,8 @@ import type {
 import { columnLetters, columnOf, lineColumns, type PlacedBlock, place, quoteSheet } from './layout'
 
 /**
- * W1 Every named value has one place, a label, a quantity and a role; names are declared once.
- * W2 Row 0 of every sheet is its header; numbers are written in the units of the workbook's system.
+ * D1 Every named value has one place, a label, a quantity and a role; names are declared once.
+ * D2 Row 0 of every sheet is its header; numbers are written in the units of the workbook's system.
  */
 export function compile(sheets: readonly SheetDeclaration[], system: UnitSystem): Workbook {
   const placed = place(sheets)

@@ -151,7 +151,7 @@ const own: Record<string, GridRow> = {
 }
 
 /**
- * T1 Whole sheets are bought of each stock sheet: area with overhang and waste over the sheet's area, rounded up once
+ * T0 Whole sheets are bought of each stock sheet: area with overhang and waste over the sheet's area, rounded up once
  * over all the surfaces that share it. Where no sheet is stocked, the area with waste is bought.
  */
 export const takeOff: SheetDeclaration = {

@@ -58,7 +58,7 @@ async function exported(request: WorkbookRequest, name: string): Promise<Exporte
   return { name, bytes: await xlsxBytes(workbook, wrong), workbook, values }
 }
 
-test('[W2] every frame type in both systems recalculates elsewhere to the same values, with no error cell', async () => {
+test('[D2] every frame type in both systems recalculates elsewhere to the same values, with no error cell', async () => {
   const files: Exported[] = []
   for (const type of frameTypes) {
     for (const system of unitSystems) {
