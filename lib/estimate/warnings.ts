@@ -22,7 +22,7 @@ const cellAt = (
 }
 
 /**
- * D1 What the checks say, errors first, then every override. A check that was taken out of the workbook says nothing.
+ * D3 What the checks say, errors first, then every override. A check that was taken out of the workbook says nothing.
  * `read` gives the computed values of a name, or nothing where there is no such name.
  */
 export function warningsOf(

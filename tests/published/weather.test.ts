@@ -97,6 +97,18 @@ describe('snow and wind: preliminary screens', () => {
   })
 })
 
+test('[P7] a fixing of 100 lb holds 20 psf on 4 ft × 1.25 ft, and wider is an error (computed)', () => {
+  const fresh = openLive({ system: 'us' })
+  fresh.set({ roof_uplift: 20, purlin_spacing: 4, fixing_holding: 100, fixing_spacing: 1.25 })
+  expect(fresh.number('allowable_fixing_spacing')).toBeCloseTo(1.25, 10)
+  expect(fresh.text('fixing_check')).toBe('in order')
+  fresh.set({ fixing_spacing: 1.3 })
+  expect(fresh.text('fixing_check')).toMatch(/wider than the screen allows/)
+  fresh.set({ roof_covering: 'FILM-2' })
+  expect(fresh.text('fixing_check')).toBe('in order')
+  fresh.close()
+})
+
 describe('the bend of sheets between purlins', () => {
   /** A strip 1 m wide of EI 210,000 N·m² bends by a twentieth of this span under 1 kPa: 5wL⁴/384EI = L/20. */
   const span = ((384 * 210_000) / (5 * 1000 * 20)) ** (1 / 3)
@@ -190,6 +202,11 @@ describe('sheets', () => {
     const spacing = convert(fresh.number('fixing_spacing'), 'length', 'us', 'si')
     expect(spacing).toBeGreaterThanOrEqual(0.3)
     expect(spacing).toBeLessThanOrEqual(0.5)
+    // Holes: the shank and 3 mm at least, and never less than an end moves.
+    fresh.set({ lowest_sheet_temperature: 60, highest_sheet_temperature: 60, fitting_temperature: 60 })
+    expect(convert(fresh.number('hole_oversize'), 'small-length', 'us', 'si')).toBeCloseTo(3, 10)
+    fresh.set({ lowest_sheet_temperature: -40, highest_sheet_temperature: 160 })
+    expect(fresh.number('hole_oversize')).toBeCloseTo(fresh.number('expansion_movement') / 2, 10)
     fresh.close()
   })
   test('the screens say the same in both systems', () => {

@@ -9,6 +9,7 @@ import {
   type SheetDeclaration,
 } from '../declare'
 import { surfaceNames } from './surfaces'
+import { fixingLines, gapLines } from './weather-fixings'
 import { weatherInputs } from './weather-inputs'
 import { loadColumns, loadRows, purlinLines } from './weather-purlins'
 
@@ -150,6 +151,7 @@ export const weather: SheetDeclaration = {
         total: true,
       }),
       ...purlinLines,
+      ...fixingLines,
       heading('Sheets'),
       computed({
         name: 'expansion_allowance',
@@ -166,6 +168,7 @@ export const weather: SheetDeclaration = {
         formula: '=MAX(sheet_growth)+MAX(sheet_shrinkage)',
         source: 'from the coldest to the hottest sheet',
       }),
+      ...gapLines,
       computed({
         name: 'minimum_bend_radius',
         label: 'Least bend radius of the roof covering',

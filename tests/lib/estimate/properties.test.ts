@@ -224,6 +224,7 @@ const inOwnUnits: ReadonlySet<string> = new Set([
   'hours_of_capacity',
   'light_per_irradiation',
   'megajoules_per_irradiation',
+  'pressure_of_mass',
   'small_lengths',
   'gain_factor',
 ])

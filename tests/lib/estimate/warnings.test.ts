@@ -13,6 +13,7 @@ const calm = {
   daily_light_target: 1,
   inside_relative_humidity: 0.2,
   purlin_spacing: 1,
+  fixing_spacing: 1,
   frame_type: 'gable',
   ridge_height: 14,
 }
@@ -21,7 +22,7 @@ const warnings = (): readonly Warning[] => {
   return warningsOf(us.workbook, (name) => all.get(name))
 }
 
-describe('[D1] warnings', () => {
+describe('[D3] warnings', () => {
   test('a house with nothing wrong has none', () => {
     us.set(calm)
     expect(warnings()).toEqual([])
@@ -36,6 +37,7 @@ describe('[D1] warnings', () => {
       /tighter than the covering may be bent/,
     ],
     ['purlins too wide', { purlin_spacing: 30 }, 'purlin_spacing', 'error', /wider than the screen allows/],
+    ['fixings too wide', { fixing_spacing: 20 }, 'fixing_spacing', 'error', /fixings stand wider/],
     [
       'condensation',
       { inside_relative_humidity: 0.95 },
@@ -59,14 +61,20 @@ describe('[D1] warnings', () => {
     expect(said?.severity).toBe(severity)
     const area = us.workbook.names.get(name)?.area
     const sheet = us.workbook.sheets.find(({ id }) => id === area?.sheet)
-    expect(said?.cell).toBe(`${sheet?.name}!B${(area?.row ?? 0) + 1}`)
+    expect(said?.cell.replaceAll("'", '')).toBe(`${sheet?.name}!B${(area?.row ?? 0) + 1}`)
     us.set({ ...calm, frame_width: 24 })
   })
 
   test('errors come before warnings, and warnings before notes', () => {
     us.set({ ...calm, roof_covering: 'GLASS-1', purlin_spacing: 30 })
-    // The glass sweats and scorches.
-    expect(warnings().map(({ severity }) => severity)).toEqual(['error', 'warning', 'warning', 'note'])
+    // Purlins so wide fail for the sheets and for the fixings; the glass sweats and scorches.
+    expect(warnings().map(({ severity }) => severity)).toEqual([
+      'error',
+      'error',
+      'warning',
+      'warning',
+      'note',
+    ])
     us.set(calm)
   })
 
