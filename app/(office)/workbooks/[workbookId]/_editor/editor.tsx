@@ -164,7 +164,10 @@ export function Editor({ session }: { readonly session: Session }) {
           session={session}
           onGo={(address) => select({ session, view }, { ...address, rowCount: 1, columnCount: 1 })}
           onClose={() => setPanel(undefined)}
-          onClosed={() => view.focus?.grid()}
+          onClosed={() => {
+            // Unless something else has been opened meanwhile.
+            if (document.activeElement === document.body) view.focus?.grid()
+          }}
         />
       ) : null}
     </div>

@@ -25,9 +25,14 @@ export function Panel({
       <Dialog.Portal>
         <Dialog.Overlay className="fixed inset-0 z-40 bg-veil" />
         <Dialog.Content
-          className={`fixed top-[min(5rem,6vh)] left-1/2 z-50 flex max-h-[88vh] -translate-x-1/2 flex-col overflow-hidden rounded-soft border border-line bg-raised text-ink shadow-lift ${
+          className={`fixed top-[min(5rem,6vh)] left-1/2 z-50 flex max-h-[88vh] -translate-x-1/2 flex-col overflow-hidden rounded-soft border border-line bg-raised text-ink shadow-lift outline-none ${
             wide ? 'w-[min(68rem,calc(100vw-1rem))]' : 'w-[min(44rem,calc(100vw-1rem))]'
           }`}
+          // The keyboard is in the panel, on nothing yet: no button lights up that nobody asked for.
+          onOpenAutoFocus={(event) => {
+            event.preventDefault()
+            if (event.currentTarget instanceof HTMLElement) event.currentTarget.focus()
+          }}
           onCloseAutoFocus={(event) => {
             event.preventDefault()
             onClosed()

@@ -50,7 +50,10 @@ function isRight(sheet: Sheet, column: number, value: ReadCell): boolean {
   return right > left
 }
 
-/** Widths for columns that have none: as their first rows need. Never less than in `before`, so that nothing jumps. */
+/**
+ * Widths as the first rows need. A column that has a width keeps it unless a number would not fit; one that has none is
+ * never less wide than in `before`, so that nothing jumps.
+ */
 export function fittingWidths(
   source: CellSource,
   heads: readonly ColumnHead[],
@@ -58,13 +61,16 @@ export function fittingWidths(
 ): number[] {
   const { sheet } = source
   return heads.map((head, column) => {
-    let longest = Math.max(head.title.length, head.letters.length + head.unit.length + 1)
+    const given = sheet.columns[column]?.width
+    const titles = Math.max(head.title.length, head.letters.length + head.unit.length + 1)
+    let longest = given === undefined ? titles : 0
     for (let row = 1; row < Math.min(sheet.rowCount, looked); row += 1) {
       if (sheet.rows[row]?.[column]?.input === undefined) continue
+      if (given !== undefined && typeof source.value(row, column) !== 'number') continue
       longest = Math.max(longest, shownText(source, row, column).length)
     }
-    const width = Math.min(widest, Math.max(narrowest, Math.ceil(longest * characterWidth) + 20))
-    return Math.max(width, before[column] ?? 0)
+    const needed = Math.min(widest, Math.ceil(longest * characterWidth) + 20)
+    return given === undefined ? Math.max(narrowest, needed, before[column] ?? 0) : Math.max(given, needed)
   })
 }
 
@@ -77,6 +83,6 @@ export function gridColumns(
   return heads.map((head, column) => ({
     id: `${sheet.id} ${column}`,
     title: head.title === '' ? head.letters : `${head.letters} ${head.title}`,
-    width: resized.get(column) ?? sheet.columns[column]?.width ?? fitting[column] ?? narrowest,
+    width: resized.get(column) ?? fitting[column] ?? narrowest,
   }))
 }

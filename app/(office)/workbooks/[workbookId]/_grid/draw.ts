@@ -76,7 +76,7 @@ export function cellDrawer(
 const digitWidth = 7.8
 
 function roomFor(text: string, width: number): boolean {
-  return text.length * digitWidth <= width - 6
+  return text.length * digitWidth <= width - 9
 }
 
 /** A number cut off at the left would read as another number, so it is not shown at all. */

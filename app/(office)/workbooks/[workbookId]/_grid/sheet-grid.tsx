@@ -172,7 +172,13 @@ export default function SheetGrid(props: SheetGridProps) {
           cellActivationBehavior="double-click"
           onVisibleRegionChanged={(range) => {
             visible.current = range
-            if (!drawn.current) requestAnimationFrame(() => takeKeyboard(grid.current))
+            if (!drawn.current) {
+              requestAnimationFrame(() => {
+                const { active } = view.snapshot().selection
+                grid.current?.scrollTo(active.column, active.row - 1)
+                takeKeyboard(grid.current)
+              })
+            }
             drawn.current = true
             if (view.snapshot().edit) setScrolled((count) => count + 1)
           }}

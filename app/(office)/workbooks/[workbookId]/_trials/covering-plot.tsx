@@ -23,7 +23,7 @@ export interface CoveringPlotProps {
 }
 
 const tick = { fill: 'var(--quiet)', fontSize: 12, fontFamily: 'var(--font-mono)' }
-const margin = { top: 14, right: 22, bottom: 26, left: 8 }
+const margin = { top: 14, right: 40, bottom: 26, left: 8 }
 
 /** Price against yearly heat; the larger the disc, the more light in winter. The table beside it says the same in figures. */
 export default function CoveringPlot(props: CoveringPlotProps) {
@@ -57,7 +57,7 @@ export default function CoveringPlot(props: CoveringPlotProps) {
           stroke="var(--edge)"
           width={64}
         />
-        <ZAxis type="number" dataKey="light" range={[130, 900]} />
+        <ZAxis type="number" dataKey="light" range={[110, 620]} />
         <Scatter
           data={[...points]}
           isAnimationActive={false}
@@ -94,6 +94,7 @@ function Disc({
         cy={cy}
         r={radius}
         fill={on ? 'var(--clay)' : 'var(--frost)'}
+        fillOpacity={on ? 1 : 0.85}
         stroke={on || payload.now ? 'var(--clay)' : 'var(--edge)'}
         strokeWidth={payload.now ? 3 : 1}
       />

@@ -23,23 +23,25 @@ export function OutcomeTable({
   readonly onMark: (code: string) => void
   readonly onChoose: (trial: Trial) => void
 }) {
-  const head = 'sticky top-0 bg-raised px-2 py-1.5 text-right font-normal text-quiet'
+  const head = 'sticky top-0 bg-raised px-2 py-1.5 align-bottom font-normal max-sm:px-1.5 text-quiet'
   return (
     <div className="min-w-0 flex-1 overflow-x-auto border-line border-t lg:overflow-y-auto lg:border-t-0 lg:border-l">
       <table className="w-full border-collapse text-[0.875rem]" onKeyDown={moveFocus}>
         <caption className="sr-only">Coverings by price</caption>
         <thead className="text-[0.8125rem]">
           <tr>
-            <th scope="col" className={`${head} w-9`}>
+            <th scope="col" className={`${head} w-9 text-right`}>
               <span className="sr-only">Number in the plot</span>
             </th>
             <th scope="col" className={`${head} text-left`}>
               Covering
             </th>
             {(['price', 'heat', 'light'] as const).map((aspect) => (
-              <th key={aspect} scope="col" className={head}>
+              <th key={aspect} scope="col" className={`${head} text-right`}>
                 {figures[aspect].label}
-                {figures[aspect].unit === '' ? '' : `, ${figures[aspect].unit}`}
+                {figures[aspect].unit === '' ? null : (
+                  <span className="block text-[0.75rem]">{figures[aspect].unit}</span>
+                )}
               </th>
             ))}
           </tr>
@@ -47,7 +49,7 @@ export function OutcomeTable({
         <tbody>
           {outcomes.map((outcome, i) => {
             const { trial } = outcome
-            const cell = 'figure px-2 py-1 text-right whitespace-nowrap'
+            const cell = 'figure px-2 py-1 text-right whitespace-nowrap max-sm:px-1.5 max-sm:text-[0.8125rem]'
             return (
               <tr
                 key={trial.code}
@@ -55,7 +57,7 @@ export function OutcomeTable({
                 onPointerEnter={() => onMark(trial.code)}
               >
                 <td className={`${cell} text-quiet`}>{i + 1}</td>
-                <th scope="row" className="px-2 py-0.5 text-left font-normal">
+                <th scope="row" className="px-2 py-0.5 text-left font-normal max-sm:px-1.5">
                   <button
                     type="button"
                     data-outcome={trial.code}

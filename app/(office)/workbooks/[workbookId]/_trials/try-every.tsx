@@ -49,10 +49,10 @@ export function TryEvery({ session, asked, onChoose, onClose, onClosed }: TryEve
       <div className="flex min-h-0 flex-1 flex-col overflow-y-auto lg:flex-row lg:overflow-hidden">
         <figure className="m-0 flex shrink-0 flex-col px-2 pt-2 lg:w-[46%]">
           <figcaption className="px-3 text-[0.8125rem] text-quiet">
-            {figures.heat.label}, {figures.heat.unit}. Larger discs let in more light in winter; the heavy
-            ring is what is there now.
+            {figures.heat.label}, {figures.heat.unit}. Larger discs let in more light in winter.
+            {now === undefined ? '' : ' The heavy ring is what is there now.'}
           </figcaption>
-          <div aria-hidden="true" className="h-56 w-full lg:h-[25rem]">
+          <div aria-hidden="true" className="h-56 w-full lg:h-auto lg:min-h-[24rem] lg:flex-1">
             {points.length > 0 ? (
               <CoveringPlot
                 points={points}
@@ -130,6 +130,14 @@ export interface FigureWords {
   readonly show: (value: number, digits?: number) => string
 }
 
+/** Columns are narrow; the names in full stand in the workbook. */
+const shortLabels: Readonly<Record<string, string>> = {
+  quotation_total: 'Quotation',
+  annual_heat_demand: 'Heat a year',
+  annual_fuel_cost: 'Fuel a year',
+  darkest_month_light: 'Winter light',
+}
+
 function figuresOf(
   session: WorkbookSession,
   names: ReturnType<typeof trialNames>,
@@ -141,9 +149,9 @@ function figuresOf(
     if (!named) return { label: 'not in this workbook', unit: '', show: () => '–' }
     const { quantity } = named
     return {
-      label: labelOf(named),
+      label: shortLabels[named.name] ?? labelOf(named),
       unit: quantity === 'ratio' || isMoney(quantity) ? '' : unitOf(quantity, system).symbol,
-      show: (value, digits) =>
+      show: (value, digits = isMoney(quantity) ? 0 : undefined) =>
         formatQuantity(value, quantity, system, {
           unit: false,
           ...(digits === undefined ? {} : { digits }),
