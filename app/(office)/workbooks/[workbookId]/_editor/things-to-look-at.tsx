@@ -75,8 +75,8 @@ function FindingRow({
       onClick={() => onGo(goTo)}
       className="flex w-full items-baseline gap-3 px-5 py-2 text-left hover:bg-frost focus-visible:bg-frost focus-visible:outline-offset-[-2px] max-sm:flex-wrap max-sm:gap-y-0.5"
     >
-      <span className={`w-24 shrink-0 text-[0.8125rem] ${tone}`}>
-        <span aria-hidden="true" className="mr-1.5 inline-block w-3 text-center font-semibold">
+      <span className="w-24 shrink-0 text-[0.8125rem] text-quiet">
+        <span aria-hidden="true" className={`mr-1.5 inline-block w-3 text-center font-semibold ${tone}`}>
           {mark}
         </span>
         {word}

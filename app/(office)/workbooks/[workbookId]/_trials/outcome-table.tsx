@@ -69,7 +69,12 @@ export function OutcomeTable({
                     <span className="sr-only">Use </span>
                     {trial.title}
                     {trial.code === now ? (
-                      <span className="ml-2 whitespace-nowrap text-[0.8125rem] text-clay">◉ now</span>
+                      <span className="ml-2 whitespace-nowrap text-[0.8125rem] text-quiet">
+                        <span aria-hidden="true" className="text-clay">
+                          ◉{' '}
+                        </span>
+                        now
+                      </span>
                     ) : null}
                   </button>
                 </th>
