@@ -22,12 +22,12 @@ export function PhoneSteps({
   const steps = sheets.filter((sheet) => sheet.kind === 'step')
   const tables = sheets.filter((sheet) => sheet.kind === 'table')
   return (
-    <div className="flex shrink-0 items-center gap-3 border-line border-b px-4 py-2 md:hidden">
+    <header className="flex shrink-0 items-center gap-3 border-line border-b px-4 py-2 md:hidden">
       <Link href="/workbooks" aria-label="All workbooks" className="grid size-9 place-items-center">
         <Mark />
       </Link>
       <div className="min-w-0 flex-1">
-        <p className="truncate text-[0.8125rem] text-quiet">{session.title}</p>
+        <h1 className="truncate font-normal text-[0.8125rem] text-quiet">{session.title}</h1>
         <select
           aria-label="Step"
           value={shown}
@@ -60,6 +60,6 @@ export function PhoneSteps({
       >
         Commands
       </button>
-    </div>
+    </header>
   )
 }
