@@ -79,11 +79,11 @@ class BothPages {
     for (let i = 0; i < count; i++) {
       const number = this.next(edit)
       let expected = Number.NaN
-      const there = await longestTaskDuring(browser, async () => {
+      const there = await longestTaskDuring(browser, this.rawPage, async () => {
         expected = (await this.editRaw(edit, number)).result
       })
       await typeNumber(this.page, number)
-      const here = await longestTaskDuring(browser, async () => {
+      const here = await longestTaskDuring(browser, this.page, async () => {
         const shown = painted(this.page, expected, 0.0051)
         await this.page.keyboard.press('Enter')
         await shown

@@ -5,13 +5,16 @@ import type { Page, Response } from 'playwright-core'
 export interface Scripts {
   /** Named in the page's own HTML: what a first load waits for. */
   readonly first: number
-  /** Those that the window fetched later, the grid among them, largest first. */
-  readonly later: readonly number[]
+  /** Those that the window fetched later: the grid's, and the others, largest first. */
+  readonly grid: readonly number[]
+  readonly others: readonly number[]
   /** Of all that the window fetched, the ones that hold HyperFormula; and the same of its workers. */
   readonly engineOnWindow: number
   readonly engineInWorker: number
 }
 
+/** Class names of the grid's package, which no minifier changes. */
+const gridMark = /\bgdg-|\bdvn-scroll/
 const engineMark = 'buildFromSheets'
 
 /** Opens an address and weighs the scripts that come; `settled` says when the last of them has been asked for. */
@@ -41,14 +44,15 @@ export async function weighScripts(
       size: gzipSync(await body, { level: 9 }).length,
     })),
   )
+  const later = scripts
+    .filter(({ url }) => !first.has(url) && onWindow.has(url))
+    .sort((a, b) => b.size - a.size)
   const sum = (test: (script: (typeof scripts)[number]) => boolean) =>
     scripts.filter(test).reduce((total, { size }) => total + size, 0)
   return {
     first: sum(({ url }) => first.has(url)),
-    later: scripts
-      .filter(({ url }) => !first.has(url) && onWindow.has(url))
-      .map(({ size }) => size)
-      .sort((a, b) => b - a),
+    grid: later.filter(({ text }) => gridMark.test(text)).map(({ size }) => size),
+    others: later.filter(({ text }) => !gridMark.test(text)).map(({ size }) => size),
     engineOnWindow: sum(
       ({ url, text }) => (onWindow.has(url) || first.has(url)) && text.includes(engineMark),
     ),

@@ -1,4 +1,4 @@
-import type { Browser } from 'playwright-core'
+import type { Browser, Page } from 'playwright-core'
 
 /** The longest task that a page's main thread had, in milliseconds. */
 export interface LongestTask {
@@ -16,12 +16,19 @@ interface TraceEvent {
   /** Microseconds by the clock, and of processor time. */
   readonly dur?: number
   readonly tdur?: number
-  readonly args?: { readonly name?: string }
 }
 
-/** Records every task of every page's main thread while `act` runs; only one page should have work then. */
-export async function longestTaskDuring(browser: Browser, act: () => Promise<unknown>): Promise<LongestTask> {
-  await browser.startTracing(undefined, { categories: ['toplevel', '__metadata'] })
+const sign = 'benchmark'
+
+/** Records the tasks of this page's main thread while `act` runs. */
+export async function longestTaskDuring(
+  browser: Browser,
+  page: Page,
+  act: () => Promise<unknown>,
+): Promise<LongestTask> {
+  await browser.startTracing(undefined, { categories: ['toplevel', 'blink.user_timing', '__metadata'] })
+  // The record is of all pages: a mark tells which thread is this one's.
+  await page.evaluate((sign) => performance.mark(sign), sign)
   // Tracing is stopped whatever happened, or the next one could not start.
   const failure = await act().then(
     () => undefined,
@@ -30,14 +37,10 @@ export async function longestTaskDuring(browser: Browser, act: () => Promise<unk
   const recorded = await browser.stopTracing()
   if (failure) throw failure
   const { traceEvents } = JSON.parse(recorded.toString()) as { readonly traceEvents: readonly TraceEvent[] }
-  const mainThreads = new Set(
-    traceEvents
-      .filter(({ name, args }) => name === 'thread_name' && args?.name === 'CrRendererMain')
-      .map(({ pid, tid }) => `${pid} ${tid}`),
-  )
+  const mark = traceEvents.find(({ name }) => name === sign)
   const tasks = traceEvents.filter(
     ({ name, ph, pid, tid }) =>
-      ph === 'X' && name === 'ThreadControllerImpl::RunTask' && mainThreads.has(`${pid} ${tid}`),
+      ph === 'X' && name === 'ThreadControllerImpl::RunTask' && pid === mark?.pid && tid === mark.tid,
   )
   if (tasks.length === 0) throw new Error('no task of a main thread was recorded')
   const longest = (of: (task: TraceEvent) => number | undefined) =>
