@@ -96,7 +96,8 @@ function lostPart(operation: Operation, moved: readonly Operation[]): boolean {
  */
 export function squash(a: Operation, b: Operation): Operation | undefined {
   if (a.kind !== 'set-cells' || b.kind !== 'set-cells' || a.sheet !== b.sheet) return undefined
-  if (a.system !== b.system) return undefined
+  // Numbers in the other system take the quantity that their cell has at their turn: they are not put together.
+  if (a.system !== undefined || b.system !== undefined) return undefined
   const merged = new Map<number, CellPatch>()
   for (const cell of [...a.cells, ...b.cells]) {
     const key = cell.row * limits.columns + cell.column
