@@ -49,8 +49,10 @@ export async function expectNothingWrong(page: Page, what: string): Promise<void
   )) as { readonly violations: readonly Violation[] }
   const words = violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html} ${nodes[0]?.failureSummary}`)
   expect(words, what).toEqual([])
-  const beyond = await page.evaluate(() => document.documentElement.scrollWidth - innerWidth)
-  expect(beyond, what).toBeLessThanOrEqual(0)
+  // The grid follows a change of the window a moment later.
+  await expect
+    .poll(() => page.evaluate(() => document.documentElement.scrollWidth - innerWidth), { message: what })
+    .toBeLessThanOrEqual(0)
 }
 
 export const views: readonly View[] = (['light', 'dark'] as const).flatMap((theme) => [

@@ -40,11 +40,11 @@ export function EntryLine({ session, view, editing, note, onNoteDone }: Props) {
   const changed = lastChangeWords(session, session.lastChange(address), new Date())
   const locked = sheet && lockWords(session, sheet)
   const id = useId()
-  const input = useRef<HTMLInputElement>(null)
+  const input = useRef<HTMLTextAreaElement>(null)
   const text = edit?.text ?? (sheet ? openingText(editing.context(sheet), row, column) : '')
   const problem = (edit?.where === 'line' ? edit.error : undefined) ?? words.error
 
-  const onKeyDown = (event: KeyboardEvent<HTMLInputElement>) => {
+  const onKeyDown = (event: KeyboardEvent<HTMLTextAreaElement>) => {
     const action = editAction(pressOf(event), 'amend', false)
     if (!action || action.kind === 'choose' || action.kind === 'newline') return
     event.preventDefault()
@@ -63,8 +63,10 @@ export function EntryLine({ session, view, editing, note, onNoteDone }: Props) {
       <span className="figure w-14 font-semibold text-[0.875rem] text-clay max-sm:w-10">{words.address}</span>
       <div className="min-w-0">
         <div className="flex items-baseline gap-4">
-          <input
+          {/* A text field of one row: a plain input would drop the line breaks of a text. */}
+          <textarea
             ref={input}
+            rows={1}
             data-region-focus
             aria-label={`Input of ${words.address}`}
             aria-describedby={`${id}-about`}
@@ -74,7 +76,7 @@ export function EntryLine({ session, view, editing, note, onNoteDone }: Props) {
             spellCheck={false}
             autoComplete="off"
             placeholder={locked ? '' : 'empty'}
-            className="block min-w-0 flex-1 truncate rounded-[2px] bg-transparent text-[0.9375rem] leading-6 outline-none placeholder:text-quiet focus-visible:bg-paper focus-visible:shadow-[0_0_0_4px_var(--paper),0_2px_0_4px_var(--clay)]"
+            className="block h-6 min-w-0 flex-1 resize-none overflow-hidden whitespace-pre rounded-[2px] focus:h-auto focus:max-h-24 focus:overflow-y-auto focus:field-sizing-content bg-transparent text-[0.9375rem] leading-6 outline-none placeholder:text-quiet focus-visible:bg-paper focus-visible:shadow-[0_0_0_4px_var(--paper),0_2px_0_4px_var(--clay)]"
             onFocus={() => {
               if (locked === undefined && !edit) editing.begin('line')
             }}
