@@ -101,8 +101,12 @@ async function appendFunction(db: Kysely<unknown>): Promise<void> {
         return query select 'absent', 0, '{}'::uuid[], '{}'::integer[], null::timestamptz;
         return;
       end if;
-      select array_agg(o.id), array_agg(o.seq) into v_ids, v_seqs from public.operation o
-      where o.firm_id = p_firm and o.workbook_id = p_workbook and o.id = any (p_ids);
+      -- One look-up by the whole unique key for each id: a plan over all ids at once reads the workbook's whole log.
+      select array_agg(o.id), array_agg(o.seq) into v_ids, v_seqs
+      from unnest(p_ids) as s (id) cross join lateral (
+        select l.id, l.seq from public.operation l
+        where l.firm_id = p_firm and l.workbook_id = p_workbook and l.id = s.id
+        offset 0) as o;
       if v_ids is not null or p_base <> v_head then
         return query select
           case when cardinality(v_ids) = v_count then 'known'

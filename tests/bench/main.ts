@@ -8,6 +8,7 @@ const sections: Record<string, () => Promise<{ run: (say: Say) => Promise<Line[]
   export: () => import('./export'),
   append: () => import('./append'),
   autosave: () => import('./autosave'),
+  trials: () => import('./trials'),
   browser: () => import('./browser'),
 }
 
