@@ -25,7 +25,7 @@ export function Tally({ session }: { readonly session: WorkbookSession }) {
       aria-label="Tally"
       data-region="tally"
       tabIndex={-1}
-      className="flex shrink-0 overflow-x-auto overscroll-x-contain border-line border-b outline-none"
+      className="relative flex shrink-0 overflow-x-auto overscroll-x-contain border-line border-b outline-none"
     >
       <dl className="flex min-w-max flex-1" data-region-focus tabIndex={0} aria-label="Figures of the job">
         {readings.map((reading) => (
