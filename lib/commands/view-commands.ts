@@ -44,7 +44,7 @@ export const accountCommands: readonly Command[] = [
     group: 'Account',
     anywhere: true,
     when: always,
-    says: () => 'Ends this session at once.',
+    says: () => 'Ends your sign-in at once.',
     run: () => ({ kind: 'view', change: { kind: 'sign-out' } }),
   },
 ]

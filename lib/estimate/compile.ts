@@ -1,5 +1,6 @@
 import { convert, type Quantity, type UnitSystem, unitOf } from '../units'
 import type { Cell, CellFormat, Column, NamedValue, Sheet, Workbook } from '../workbook'
+import { columnName } from '../workbook/address'
 import type {
   CellContent,
   GridBlock,
@@ -10,7 +11,7 @@ import type {
   SheetDeclaration,
   Stated,
 } from './declare'
-import { columnLetters, columnOf, lineColumns, type PlacedBlock, place, quoteSheet } from './layout'
+import { columnOf, lineColumns, type PlacedBlock, place, quoteSheet } from './layout'
 
 /**
  * D1 Every named value has one place, a label, a quantity and a role; names are declared once.
@@ -43,7 +44,7 @@ export function compile(sheets: readonly SheetDeclaration[], system: UnitSystem)
     const area = placed.areas.get(name)
     if (!area) throw new Error(`no column is named ${name}`)
     const sheet = quoteSheet(placed.sheetNames.get(area.sheet) ?? area.sheet)
-    return `${sheet}!${columnLetters(area.column)}${area.row + offset + 1}`
+    return `${sheet}!${columnName(area.column)}${area.row + offset + 1}`
   }
   for (const at of placed.blocks) {
     const sheet = byId.get(at.sheet.id)
@@ -221,7 +222,7 @@ function refer(
   if (typeof value !== 'string' || !value.startsWith('=')) return value
   return value
     .replace(/\[(?:(first|above):)?([^\]]+)\]/g, (_, reach: string | undefined, title: string) => {
-      const letters = columnLetters(columnOf(block, title))
+      const letters = columnName(columnOf(block, title))
       const first = row - offset + 1
       if (reach === 'first') return `${letters}$${first}:${letters}${row + 1}`
       if (reach === 'above') return `${letters}$${first - 1}:${letters}${row}`

@@ -101,15 +101,6 @@ export function columnOf(block: GridBlock, title: string): number {
   return index
 }
 
-/** A, B, … Z, AA, … */
-export function columnLetters(index: number): string {
-  let letters = ''
-  for (let rest = index + 1; rest > 0; rest = Math.floor((rest - 1) / 26)) {
-    letters = String.fromCharCode(65 + ((rest - 1) % 26)) + letters
-  }
-  return letters
-}
-
 export function quoteSheet(name: string): string {
   return /^[A-Za-z]+$/.test(name) ? name : `'${name.replaceAll("'", "''")}'`
 }

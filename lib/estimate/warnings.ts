@@ -1,6 +1,7 @@
 import { type Area, type CellValue, isCellError, type NamedValue, type Workbook } from '../workbook'
+import { columnName } from '../workbook/address'
 import { inOrder, type Severity } from './declare'
-import { columnLetters, quoteSheet } from './layout'
+import { quoteSheet } from './layout'
 import { templateChecks } from './template'
 
 /** Something to look at, and the cell to go to. */
@@ -18,7 +19,7 @@ const cellAt = (
   { sheet, row, column }: Pick<Area, 'sheet' | 'row' | 'column'>,
 ): string => {
   const name = workbook.sheets.find(({ id }) => id === sheet)?.name ?? sheet
-  return `${quoteSheet(name)}!${columnLetters(column)}${row + 1}`
+  return `${quoteSheet(name)}!${columnName(column)}${row + 1}`
 }
 
 /**

@@ -5,8 +5,7 @@ import { join } from 'node:path'
 import { pathToFileURL } from 'node:url'
 import { promisify } from 'node:util'
 import ExcelJS from 'exceljs'
-import type { CellAddress, CellValue, Workbook } from '@/lib/workbook'
-import { columnLetters } from '@/lib/workbook/xlsx/addresses'
+import { type CellAddress, type CellValue, columnName, type Workbook } from '@/lib/workbook'
 
 /** One exported file, and the values that it must come to. */
 export interface Exported {
@@ -109,7 +108,7 @@ function compareBook(file: Exported, book: ExcelJS.Workbook): Comparison {
     sheet.rows.forEach((row, r) => {
       row?.forEach((cell, c) => {
         if (cell?.input === undefined) return
-        const label = `${columnLetters(c)}${r + 1}`
+        const label = `${columnName(c)}${r + 1}`
         compared.add(label)
         const expected = file.values({ sheet: sheet.id, row: r, column: c })
         const read = found ? readCell(found.getCell(label)) : undefined

@@ -1,23 +1,10 @@
 import { readFileSync } from 'node:fs'
 import { join } from 'node:path'
-import { type Browser, chromium, type Page } from 'playwright-core'
+import type { Page } from 'playwright-core'
 import { projectRoot } from './empty-app'
 import type { RawSource } from './raw-engine'
 
-export function launchChromium(): Promise<Browser> {
-  return chromium.launch({
-    executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium',
-    args: [
-      '--no-sandbox',
-      '--disable-gpu',
-      '--disable-quic',
-      '--disable-background-networking',
-      '--disable-component-update',
-      '--disable-sync',
-      '--no-first-run',
-    ],
-  })
-}
+export { launchChromium } from '../_support/chromium'
 
 type Address = { sheet: number; row: number; col: number }
 interface PageEngine {

@@ -1,20 +1,7 @@
-import { type Browser, type BrowserContext, chromium, type Page } from 'playwright-core'
+import type { Browser, BrowserContext, Page } from 'playwright-core'
 import { demoFirm, siteAddress } from '../_support/site'
 
-export function launchChromium(): Promise<Browser> {
-  return chromium.launch({
-    executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium',
-    args: [
-      '--no-sandbox',
-      '--disable-gpu',
-      '--disable-quic',
-      '--disable-background-networking',
-      '--disable-component-update',
-      '--disable-sync',
-      '--no-first-run',
-    ],
-  })
-}
+export { launchChromium } from '../_support/chromium'
 
 export type Role = keyof typeof demoFirm.emails
 

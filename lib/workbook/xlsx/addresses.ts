@@ -1,17 +1,9 @@
+import { columnName } from '../address'
 import type { Area, NamedValue } from '../model'
-
-/** `A`, `Z`, `AA` of a column index from 0. */
-export function columnLetters(column: number): string {
-  let letters = ''
-  for (let n = column + 1; n > 0; n = Math.floor((n - 1) / 26)) {
-    letters = String.fromCharCode(65 + ((n - 1) % 26)) + letters
-  }
-  return letters
-}
 
 /** `'Take-off'!$A$2:$B$9`. The name is always quoted, which is right for any. */
 export function absoluteRange(area: Area, sheetName: string): string {
-  const corner = (row: number, column: number) => `$${columnLetters(column)}$${row + 1}`
+  const corner = (row: number, column: number) => `$${columnName(column)}$${row + 1}`
   const first = corner(area.row, area.column)
   const last = corner(area.row + area.rowCount - 1, area.column + area.columnCount - 1)
   const sheet = `'${sheetName.replaceAll("'", "''")}'`

@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest'
-import { absoluteRange, columnLetters, definedNames } from '@/lib/workbook/xlsx/addresses'
+import { columnName } from '@/lib/workbook/address'
+import { absoluteRange, definedNames } from '@/lib/workbook/xlsx/addresses'
 import { pixelsToCharacters } from '@/lib/workbook/xlsx/column-widths'
 import { fileFormula } from '@/lib/workbook/xlsx/formula-text'
 
@@ -26,7 +27,7 @@ describe('[X4] addresses', () => {
     [701, 'ZZ'],
     [702, 'AAA'],
   ])('[X4] column %d is %s', (column, letters) => {
-    expect(columnLetters(column)).toBe(letters)
+    expect(columnName(column)).toBe(letters)
   })
 
   test('[X4] ranges are absolute, their sheet quoted', () => {
